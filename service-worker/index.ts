@@ -1,0 +1,2 @@
+import { version } from '$service-worker';
+console.log(version);
