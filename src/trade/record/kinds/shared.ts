@@ -1,0 +1,25 @@
+import { isMetalId, metals, type MetalId } from '../../metal/metals.ts';
+import { massUnits, type MassUnitId } from '../../mass/units.ts';
+import type { Weighing } from '../../mass/weighing.ts';
+import { isCurrencyCode, type CurrencyCode } from '../../price/currency.ts';
+import type { Money } from '../../price/money.ts';
+import { checked, decimalText, list, nullable, object, oneOf, text, type Shape } from '../shape.ts';
+
+/** Shapes that several kinds of record share. */
+export const metal: Shape<MetalId> = checked('a metal', (found): found is MetalId => isMetalId(found) && Object.hasOwn(metals, found));
+
+export const massUnit: Shape<MassUnitId> = oneOf(Object.keys(massUnits) as MassUnitId[]);
+
+export const currency: Shape<CurrencyCode> = checked('a currency', (found): found is CurrencyCode => isCurrencyCode(found));
+
+export const money: Shape<Money> = object<Money>({ amount: decimalText, currency });
+
+export const weighing: Shape<Weighing> = object<Weighing>({
+	typed: text,
+	reading: decimalText,
+	unit: massUnit,
+	division: nullable(decimalText),
+	scale: nullable(text),
+	repeats: list(decimalText),
+	tare: nullable(decimalText)
+});
