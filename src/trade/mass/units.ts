@@ -33,6 +33,7 @@ export type MassUnit = {
 
 const SI = 'BIPM SI Brochure, 9th edition, 2.3.1 and 3';
 const HB44 = 'NIST Handbook 44, appendix C';
+const THAI = 'gold trade of Thailand, common practice, no source';
 
 function unit(id: MassUnitId, symbol: string, name: string, grams: string, source: string): MassUnit {
 	return { id, name, symbol, grams: decimal(grams), source };
@@ -49,14 +50,14 @@ export const massUnits: Readonly<Record<MassUnitId, MassUnit>> = {
 	'oz-av': unit('oz-av', 'oz av', 'avoirdupois ounce', '28.349523125', `${HB44}: 1/16 pound`),
 	'lb-av': unit('lb-av', 'lb', 'avoirdupois pound', '453.59237', `${HB44}: 7000 grains`),
 	ct: unit('ct', 'ct', 'metric carat', '0.2', `${HB44}: 200 milligrams`),
-	tola: unit('tola', 'tola', 'tola of 3/8 troy ounce', '11.6638038', 'common practice, no source: 180 grains'),
+	tola: unit('tola', 'tola', 'tola of 3/8 troy ounce', '11.6638038', "The Statesman's Year-Book 1899, p. 104: 180 grains"),
 	'tola-in': unit('tola-in', 'tola (1956)', 'tola of the Indian Act', '11.6638', 'India, Standards of Weights and Measures Act 1956, second schedule, from memory'),
-	'baht-bar': unit('baht-bar', 'baht (bar)', 'baht weight of bars', '15.244', 'Thai gold trade, common practice'),
-	'baht-ornament': unit('baht-ornament', 'baht (ornament)', 'baht weight of ornaments', '15.16', 'Thai gold trade, common practice'),
-	momme: unit('momme', 'momme', 'momme', '3.75', 'Japan, Measurement Act, 1/1000 kan of 3.75 kg, from memory'),
-	'tael-hk': unit('tael-hk', 'tael (HK)', 'Hong Kong statutory tael', '37.79936375', 'Hong Kong, Weights and Measures Ordinance, Cap. 68, from memory'),
-	'tael-hk-exchange': unit('tael-hk-exchange', 'tael (HK exchange)', 'Hong Kong bullion exchange tael', '37.429', 'Hong Kong bullion trade, common practice'),
-	'tael-tw': unit('tael-tw', 'tael (TW)', 'Taiwan tael', '37.5', 'Taiwan gold trade, common practice: ten momme')
+	'baht-bar': unit('baht-bar', 'baht (bar)', 'baht weight of bars', '15.244', THAI),
+	'baht-ornament': unit('baht-ornament', 'baht (ornament)', 'baht weight of ornaments', '15.16', THAI),
+	momme: unit('momme', 'momme', 'momme', '3.75', 'Japan, Measurement Act: 1/1000 kan of 3.75 kg, from memory'),
+	'tael-hk': unit('tael-hk', 'tael (HK)', 'Hong Kong statutory tael', '37.79936375', 'Hong Kong, Cap. 68, schedule 1, part V: 1/16 catty of 0.60478982 kg'),
+	'tael-hk-exchange': unit('tael-hk-exchange', 'tael (HK exchange)', 'Hong Kong bullion exchange tael', '37.429', 'bullion trade of Hong Kong, common practice, no source'),
+	'tael-tw': unit('tael-tw', 'tael (TW)', 'Taiwan tael', '37.5', 'gold trade of Taiwan, common practice, no source: ten momme')
 };
 
 /**
@@ -91,16 +92,6 @@ export function convert(amount: Exact, from: MassUnitId, to: MassUnitId): Exact 
 	return divide(times(amount, exact(massUnits[from].grams)), exact(massUnits[to].grams));
 }
 
-/**
- * What it is: a price for one unit as a price for another.
- * formula: price per second unit = price per first unit x grams in the second / grams in the first.
- * rounding: none.
- * source: Oregon Department of Agriculture, Measurement Standards, precious-metal scales (table of equal prices).
- */
-export function convertPrice(price: Exact, per: MassUnitId, wanted: MassUnitId): Exact {
-	return convert(price, wanted, per);
-}
-
 export type UnitProblem =
 	| { readonly kind: 'unit-missing' }
 	| { readonly kind: 'unit-unknown'; readonly text: string }
@@ -111,7 +102,10 @@ const WRITTEN: Readonly<Record<MassUnitId, readonly string[]>> = {
 	g: ['g', 'gm', 'gms', 'grm', 'grms', 'gram', 'grams', 'gramme', 'grammes', 'gramm'],
 	kg: ['kg', 'kgs', 'kilo', 'kilos', 'kilogram', 'kilograms', 'kilogramme', 'kilogrammes', 'kilogramm'],
 	mg: ['mg', 'mgs', 'milligram', 'milligrams', 'milligramme', 'milligrammes', 'milligramm'],
-	ozt: ['ozt', 'oz t', 'ozs t', 't oz', 'toz', 'oz tr', 'oz troy', 'troy oz', 'troy ozs', 'troy ounce', 'troy ounces', 'ounce troy', 'ounces troy'],
+	ozt: [
+		'ozt', 'oz t', 'ozs t', 't oz', 'toz', 'oz tr', 'oz troy', 'troy oz', 'troy ozs', 'troy ounce', 'troy ounces', 'ounce troy',
+		'ounces troy'
+	],
 	dwt: ['dwt', 'dwts', 'pwt', 'pwts', 'pennyweight', 'pennyweights'],
 	gr: ['gr', 'grain', 'grains'],
 	'oz-av': ['oz av', 'oz avdp', 'oz avoirdupois', 'avoirdupois ounce', 'avoirdupois ounces', 'av oz', 'avdp oz'],
