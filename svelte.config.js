@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { copyFileSync, readFileSync, readdirSync, statSync } from 'node:fs';
+import { copyFileSync, readFileSync, readdirSync, statSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import adapter from '@sveltejs/adapter-static';
 import { vitePreprocess } from '@sveltejs/vite-plugin-svelte';
@@ -30,7 +30,36 @@ function releaseName() {
 	return `${version}-${digest.digest('hex').slice(0, 8)}`;
 }
 
-/** adapter-static, then the copy that makes plain static hosts answer deep links with the app. */
+/** The most that a first visit may have to keep for offline, in bytes. */
+const MOST_KEPT = 2_000_000;
+
+/**
+ * Writes into the service worker the digest of every file that it keeps under a name which does not change with the
+ * content: the pages and the static files. So a file is fetched again when, and only when, its content has changed.
+ */
+function writeDigests() {
+	/** @type {Record<string, string>} */
+	const digests = {};
+	let kept = 0;
+	for (const name of readdirSync(out, { recursive: true, encoding: 'utf8' }).sort()) {
+		const file = join(out, name);
+		const path = `/${name.replaceAll('\\', '/')}`;
+		if (statSync(file).isDirectory() || path === '/service-worker.js' || path === '/404.html') continue;
+		const content = readFileSync(file);
+		kept += content.length;
+		if (path.includes('/immutable/')) continue;
+		digests[path.replace(/\/index\.html$/, '/')] = createHash('sha256').update(content).digest('hex').slice(0, 16);
+	}
+	if (kept > MOST_KEPT) throw new Error(`a first visit would keep ${kept} bytes, more than ${MOST_KEPT}`);
+	const worker = join(out, 'service-worker.js');
+	const script = readFileSync(worker, 'utf8');
+	if (!script.includes('MELTBOOK_DIGESTS')) throw new Error('the service worker does not ask for MELTBOOK_DIGESTS');
+	writeFileSync(worker, script.replaceAll('MELTBOOK_DIGESTS', `(${JSON.stringify(digests)})`));
+}
+
+/**
+ * adapter-static, then the copy that makes plain static hosts answer deep links with the app, then the digests.
+ */
 function staticSite() {
 	const inner = adapter({ pages: out, assets: out, fallback: '200.html', strict: true });
 	return {
@@ -39,6 +68,7 @@ function staticSite() {
 		async adapt(builder) {
 			await inner.adapt(builder);
 			copyFileSync(join(out, '200.html'), join(out, '404.html'));
+			writeDigests();
 		}
 	};
 }
@@ -54,7 +84,7 @@ export default {
 		serviceWorker: { register: false },
 		paths: { base, relative: false },
 		version: { name: releaseName() },
-		prerender: { entries: ['/'] },
+		prerender: { entries: ['/'], crawl: false },
 		csp: {
 			mode: 'hash',
 			directives: {
