@@ -5,6 +5,7 @@ import { parser, configs, plugin } from 'typescript-eslint';
 
 const LINE = { tabWidth: 2, ignoreUrls: true, ignoreTemplateLiterals: true, ignoreRegExpLiterals: true };
 
+/** @type {import('eslint').Linter.Config} */
 const everywhere = {
 	rules: {
 		// TypeScript knows every name, also those of the browser
