@@ -33,6 +33,9 @@ export type MassUnit = {
 
 const SI = 'BIPM SI Brochure, 9th edition, 2.3.1 and 3';
 const HB44 = 'NIST Handbook 44, appendix C';
+const INDIA = 'India, Standards of Weights and Measures Act 1956, second schedule, from memory';
+const HONG_KONG = 'Hong Kong, Weights and Measures Ordinance, Cap. 68, schedule 1, part V: 1/16 catty of 0.60478982 kg';
+const BULLION = 'bullion trade of Hong Kong, common practice, no source';
 const THAI = 'gold trade of Thailand, common practice, no source';
 
 function unit(id: MassUnitId, symbol: string, name: string, grams: string, source: string): MassUnit {
@@ -51,12 +54,12 @@ export const massUnits: Readonly<Record<MassUnitId, MassUnit>> = {
 	'lb-av': unit('lb-av', 'lb', 'avoirdupois pound', '453.59237', `${HB44}: 7000 grains`),
 	ct: unit('ct', 'ct', 'metric carat', '0.2', `${HB44}: 200 milligrams`),
 	tola: unit('tola', 'tola', 'tola of 3/8 troy ounce', '11.6638038', "The Statesman's Year-Book 1899, p. 104: 180 grains"),
-	'tola-in': unit('tola-in', 'tola (1956)', 'tola of the Indian Act', '11.6638', 'India, Standards of Weights and Measures Act 1956, second schedule, from memory'),
+	'tola-in': unit('tola-in', 'tola (1956)', 'tola of the Indian Act', '11.6638', INDIA),
 	'baht-bar': unit('baht-bar', 'baht (bar)', 'baht weight of bars', '15.244', THAI),
 	'baht-ornament': unit('baht-ornament', 'baht (ornament)', 'baht weight of ornaments', '15.16', THAI),
 	momme: unit('momme', 'momme', 'momme', '3.75', 'Japan, Measurement Act: 1/1000 kan of 3.75 kg, from memory'),
-	'tael-hk': unit('tael-hk', 'tael (HK)', 'Hong Kong statutory tael', '37.79936375', 'Hong Kong, Cap. 68, schedule 1, part V: 1/16 catty of 0.60478982 kg'),
-	'tael-hk-exchange': unit('tael-hk-exchange', 'tael (HK exchange)', 'Hong Kong bullion exchange tael', '37.429', 'bullion trade of Hong Kong, common practice, no source'),
+	'tael-hk': unit('tael-hk', 'tael (HK)', 'Hong Kong statutory tael', '37.79936375', HONG_KONG),
+	'tael-hk-exchange': unit('tael-hk-exchange', 'tael (HK exchange)', 'Hong Kong bullion exchange tael', '37.429', BULLION),
 	'tael-tw': unit('tael-tw', 'tael (TW)', 'Taiwan tael', '37.5', 'gold trade of Taiwan, common practice, no source: ten momme')
 };
 
