@@ -10,12 +10,15 @@ export const root = join(dirname(fileURLToPath(import.meta.url)), '..', '..');
 /** The oldest Node that every tool here runs on, as in "engines" of package.json. */
 const OLDEST_NODE = [20, 19];
 
-/** Stops with a clear message when Node is too old; newer syntax in the tools would otherwise fail with a riddle. */
-export function requireNode() {
-	const [major = 0, minor = 0] = process.versions.node.split('.').map(Number);
+/**
+ * Stops with a clear message when Node is too old; newer syntax in the tools would otherwise fail with a riddle.
+ * @param {string} [version]
+ */
+export function requireNode(version = process.versions.node) {
+	const [major = 0, minor = 0] = version.split('.').map(Number);
 	const [leastMajor = 0, leastMinor = 0] = OLDEST_NODE;
 	if (major > leastMajor || (major === leastMajor && minor >= leastMinor)) return;
-	throw new Error(`Meltbook needs Node ${OLDEST_NODE.join('.')} or newer; this is Node ${process.versions.node}.`);
+	throw new Error(`Meltbook needs Node ${OLDEST_NODE.join('.')} or newer; this is Node ${version}.`);
 }
 
 /** @type {Set<import('node:child_process').ChildProcess>} */
@@ -137,15 +140,16 @@ const WHOLE_PATHS = [
 
 /**
  * The path of a Chromium or Chrome on this machine, or null. CHROME_PATH decides when it is set.
+ * @param {NodeJS.ProcessEnv} [env]
  * @returns {string | null}
  */
-export function findChromium() {
-	const named = process.env.CHROME_PATH;
+export function findChromium(env = process.env) {
+	const named = env.CHROME_PATH;
 	if (named !== undefined && named !== '') {
 		if (isProgram(named)) return named;
 		throw new Error(`CHROME_PATH names ${named}, which is not a program.`);
 	}
-	const folders = [...(process.env.PATH ?? '').split(delimiter).filter((folder) => folder !== ''), ...PLACES];
+	const folders = [...(env.PATH ?? '').split(delimiter).filter((folder) => folder !== ''), ...PLACES];
 	const paths = [...NAMES.flatMap((name) => folders.map((folder) => join(folder, name))), ...WHOLE_PATHS];
 	return paths.find(isProgram) ?? null;
 }
