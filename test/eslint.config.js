@@ -46,7 +46,17 @@ export default [
 			'svelte/require-each-key': 'error',
 			'svelte/button-has-type': 'error',
 			// links inside the app go through resolve() of $app/paths
-			'svelte/no-navigation-without-resolve': 'error'
+			'svelte/no-navigation-without-resolve': 'error',
+			// props are taken apart in one let as soon as one of them is bindable
+			'prefer-const': 'off',
+			'svelte/prefer-const': ['error', { destructuring: 'all', excludedRunes: ['$props', '$derived'] }]
+		}
+	},
+	{
+		files: ['src/ui/**/*.svelte'],
+		rules: {
+			// the links of a component are handed to it, resolved by the page
+			'svelte/no-navigation-without-resolve': 'off'
 		}
 	},
 	{
