@@ -22,7 +22,7 @@ export type Balance = {
 	readonly metalLoss: Exact;
 	readonly bar: Exact;
 	readonly metals: Partial<Record<MetalId, MetalBalance>>;
-	/** The class's metal loss does not fit this metal: 'least' when the precious loss alone is more, 'most' when it would eat the base metal. */
+	/** The class's metal loss does not fit: 'least' when the precious loss alone is more, 'most' when it would eat the base metal. */
 	readonly limit: 'least' | 'most' | null;
 };
 

@@ -24,7 +24,13 @@ export type LossOverrides = Partial<Record<LossClassId, Partial<Losses>>>;
 
 export type LossProblem =
 	| { readonly kind: 'loss-range-reversed'; readonly low: Decimal; readonly high: Decimal }
-	| { readonly kind: 'loss-range-outside'; readonly part: LossPart; readonly value: Decimal; readonly least: Decimal; readonly most: Decimal };
+	| {
+			readonly kind: 'loss-range-outside';
+			readonly part: LossPart;
+			readonly value: Decimal;
+			readonly least: Decimal;
+			readonly most: Decimal;
+	  };
 
 const between = (low: string, high: string): Range => ({ low: decimal(low), high: decimal(high) });
 

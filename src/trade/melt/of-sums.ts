@@ -4,7 +4,7 @@ import { propagate, uncertain, type Uncertain } from '../uncertainty/uncertain.t
 import type { MetalId } from '../metal/metals.ts';
 import type { ClassSums, LotSums, Quantity } from '../lot/sums.ts';
 import type { LossOverrides } from './losses.ts';
-import type { MeltParcel } from './parcel.ts';
+import type { MeltParcel } from './spread.ts';
 import { meltYield, type MeltProblem, type MeltYield } from './yield.ts';
 
 /**

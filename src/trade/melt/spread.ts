@@ -1,10 +1,22 @@
+import type { Decimal } from '../number/decimal.ts';
 import { toNumber, type Exact } from '../number/exact.ts';
 import { certain, minusUncertain, sumUncertain, timesUncertain, type Uncertain } from '../uncertainty/uncertain.ts';
 import { metals, type MetalId } from '../metal/metals.ts';
+import type { LossClassId } from '../piece/loss-class.ts';
 import { MOST_BASE_LOST, type Balance } from './balance.ts';
 import { complement, product, quotient } from './combine.ts';
 import { uncertainRange, type Losses } from './losses.ts';
-import type { MeltParcel } from './parcel.ts';
+
+/** Metal of one loss class that goes into the crucible. Doubts are in grams; left out, the figure counts as certain. */
+export type MeltParcel = {
+	readonly lossClass: LossClassId;
+	/** Mass without the deductions, grams. */
+	readonly net: Decimal;
+	/** Fine grams by metal. */
+	readonly fine: Partial<Record<MetalId, Exact>>;
+	readonly netDoubt?: Uncertain;
+	readonly fineDoubt?: Partial<Record<MetalId, Uncertain>>;
+};
 
 /** The bar, the gross loss and the retained fine metal of one parcel: grams, with their sources. */
 export type Spread = { readonly bar: Uncertain; readonly grossLoss: Uncertain; readonly retained: Partial<Record<MetalId, Uncertain>> };

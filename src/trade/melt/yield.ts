@@ -6,8 +6,7 @@ import type { LossClassId } from '../piece/loss-class.ts';
 import { balance, type MetalBalance } from './balance.ts';
 import { quotient } from './combine.ts';
 import { expected, lossesOf, type LossOverrides, type Losses } from './losses.ts';
-import type { MeltParcel } from './parcel.ts';
-import { spread } from './spread.ts';
+import { spread, type MeltParcel } from './spread.ts';
 
 export type MeltProblem = { readonly kind: 'melt-empty' };
 
@@ -37,9 +36,11 @@ const PER_MILLE: Exact = { n: 1000n, d: 1n };
 
 /**
  * The bar that a melt is expected to give, with its fine metal and fineness.
- * formula: bar M = Σ net (1 − non-metal)(1 − metal loss); fine F = Σ retention × net (1 − non-metal) × fineness (grams); fineness = 1000 F ÷ M (‰)
+ * formula: bar M = Σ net (1 − non-metal)(1 − metal loss); fine F = Σ retention × net (1 − non-metal) × fineness (grams);
+ * fineness of the bar = 1000 F ÷ M (‰)
  * rounding: none of the expected figures, fractions; intervals are estimates.
- * source: conservation of mass; delta method JCGM 100:2008 (GUM) 5.2.2 with shared sources, from memory; losses by class are working defaults.
+ * source: conservation of mass; delta method, JCGM 100:2008 (GUM) 5.2.2 with shared sources, from memory; the losses by class
+ * are working defaults.
  */
 export function meltYield(parcels: readonly MeltParcel[], own: LossOverrides = {}): Result<MeltYield, MeltProblem> {
 	const weighed = parcels.filter(({ net }) => net.gt(0));
@@ -65,7 +66,8 @@ export function meltYield(parcels: readonly MeltParcel[], own: LossOverrides = {
 		for (const [metal, each] of Object.entries(part.metals) as [MetalId, MetalBalance][]) {
 			const before = sums.get(metal);
 			const grams = doubt.retained[metal]!;
-			sums.set(metal, before === undefined ? { part: each, grams } : { part: add(before.part, each), grams: plusUncertain(before.grams, grams) });
+			if (before === undefined) sums.set(metal, { part: each, grams });
+			else sums.set(metal, { part: add(before.part, each), grams: plusUncertain(before.grams, grams) });
 		}
 	}
 	const metals: Partial<Record<MetalId, MetalYield>> = {};

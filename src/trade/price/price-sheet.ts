@@ -9,7 +9,7 @@ import type { CurrencyCode } from './currency.ts';
 /** What one metal costs, as typed: an amount for one unit of mass of the fine metal. */
 export type Quote = { readonly metal: MetalId; readonly amount: Decimal; readonly per: MassUnitId };
 
-/** Prices of one moment in one currency, typed by the buyer; `source` says in his words where he read them. Never changed, only replaced. */
+/** Prices of one moment in one currency, typed by the buyer; `source` says in his words where from. Never changed, only replaced. */
 export type PriceSheet = {
 	readonly currency: CurrencyCode;
 	readonly quotes: readonly Quote[];

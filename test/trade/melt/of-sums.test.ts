@@ -8,7 +8,7 @@ import { fromKarat, fromPerMille } from '../../../src/trade/metal/fineness.ts';
 import type { MetalId } from '../../../src/trade/metal/metals.ts';
 import { meltYield, type MeltYield } from '../../../src/trade/melt/yield.ts';
 import { parcelsOf, yieldFromSums } from '../../../src/trade/melt/of-sums.ts';
-import type { MeltParcel } from '../../../src/trade/melt/parcel.ts';
+import type { MeltParcel } from '../../../src/trade/melt/spread.ts';
 import type { LossClassId } from '../../../src/trade/piece/loss-class.ts';
 import { estimate, fineOf, netOf, type Content, type Piece } from '../../../src/trade/piece/piece.ts';
 import { standardUncertainty, sumUncertain } from '../../../src/trade/uncertainty/uncertain.ts';

@@ -1,7 +1,7 @@
 import { toNumber, type Exact } from '../../../src/trade/number/exact.ts';
 import { metals, type MetalId } from '../../../src/trade/metal/metals.ts';
 import { lossesOf, type LossOverrides } from '../../../src/trade/melt/losses.ts';
-import type { MeltParcel } from '../../../src/trade/melt/parcel.ts';
+import type { MeltParcel } from '../../../src/trade/melt/spread.ts';
 import { monteCarlo, type Input } from '../../../src/trade/uncertainty/monte-carlo.ts';
 
 /** A repeatable row of numbers from 0 to below 1 (mulberry32). */

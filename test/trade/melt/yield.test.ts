@@ -6,7 +6,7 @@ import { interval } from '../../../src/trade/uncertainty/coverage.ts';
 import { standardUncertainty, type Uncertain } from '../../../src/trade/uncertainty/uncertain.ts';
 import type { MetalId } from '../../../src/trade/metal/metals.ts';
 import { lossClasses } from '../../../src/trade/piece/loss-class.ts';
-import type { MeltParcel } from '../../../src/trade/melt/parcel.ts';
+import type { MeltParcel } from '../../../src/trade/melt/spread.ts';
 import { lossShare, meltYield, type MetalYield } from '../../../src/trade/melt/yield.ts';
 import { simulateMelt } from './simulate.ts';
 
