@@ -97,7 +97,12 @@ function add(a: MetalBalance, b: MetalBalance): MetalBalance {
 	};
 }
 
-/** How much lighter the bar is than the metal that went in, as a share of it: what people call melt loss. */
+/**
+ * How much lighter the bar is than the metal that went in: what people call melt loss.
+ * formula: 1 − bar ÷ net (a share)
+ * rounding: none, for display.
+ * source: common practice, no source.
+ */
 export function lossShare(result: MeltYield): number {
 	return 1 - toNumber(divide(result.bar, result.net));
 }
