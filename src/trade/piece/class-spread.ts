@@ -22,7 +22,7 @@ export const defaultSpreads: Readonly<Record<SpreadId, Spread>> = {
 	unmarked: { shared: 0.02, own: 0.04 },
 	'stranger-bar': { shared: 0.003, own: 0.006 },
 	layered: { shared: 0.15, own: 0.15 },
-	weighted: { shared: 0.15, own: 0.3 }
+	weighted: { shared: 0.15, own: 0.05 }
 };
 
 export function isSpreadId(text: string): text is SpreadId {

@@ -1,3 +1,5 @@
+import { findCoin } from '../metal/coins.ts';
+
 /**
  * The class of a piece: stamp x article x origin, the unit about which something can be learned.
  * Two pieces of one class share the class's error: forty chains of one class do not average it out.
@@ -53,7 +55,7 @@ export function articleWords(article: string): string[] {
 /** The article that a class is named after: the first known one in the order of the list above, "other" if none is known. */
 export function articleClass(article: string): string {
 	const words = new Set(articleWords(article).map((word) => BY_WORD.get(word)));
-	return ARTICLES.find(([name]) => words.has(name))?.[0] ?? 'other';
+	return ARTICLES.find(([name]) => words.has(name))?.[0] ?? (findCoin(article).ok ? 'coin' : 'other');
 }
 
 /** "14 kt|chain|us-modern": the text under which a class is counted and learned about. */

@@ -1,4 +1,4 @@
-import { ZERO, type Decimal } from '../number/decimal.ts';
+import { decimal, ZERO, type Decimal } from '../number/decimal.ts';
 import type { Mass } from '../mass/mass.ts';
 import type { StoneSize } from './stones.ts';
 
@@ -43,6 +43,22 @@ export const DEFAULT_RELATIVE_U = 0.1;
  */
 export function statedDeduction(what: DeductionKind, mass: Mass, how: string): Deduction {
 	return { what, mass, u: mass.grams.toNumber() * DEFAULT_RELATIVE_U, how };
+}
+
+const FILLER_SHARE = decimal('0.9');
+const FILLER_RELATIVE_U = 0.03;
+/** Marks a filler that nobody weighed. */
+export const FILLER_BY_DEFAULT = 'default: 90 % of the mass';
+
+/**
+ * The filler of a weighted piece until it is opened: pitch, plaster or cement under a silver shell.
+ * formula: 90 % of the gross mass; standard uncertainty 3 % of the gross mass.
+ * rounding: none.
+ * source: common practice, no source (a working default: about 10 % of a weighted piece is silver).
+ */
+export function fillerByDefault(gross: Mass): Deduction {
+	const mass: Mass = { grams: gross.grams.times(FILLER_SHARE) };
+	return { what: 'filler', mass, u: gross.grams.toNumber() * FILLER_RELATIVE_U, how: FILLER_BY_DEFAULT };
 }
 
 /**

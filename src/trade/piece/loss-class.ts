@@ -33,7 +33,11 @@ const ZINC_SOLDER_TO = exact(decimal('425'));
  * rounding: none.
  * source: common practice, no source.
  */
-export function lossClassFor(article: string, contents: readonly { metal: MetalId; taken: Fineness }[]): LossClassId {
+export function lossClassFor(
+	article: string,
+	contents: readonly { metal: MetalId; taken: Fineness }[],
+	stonesTakenOff = false
+): LossClassId {
 	const kind = articleClass(article);
 	const words = articleWords(article);
 	let precious: Exact = EXACT_ZERO;
@@ -46,7 +50,7 @@ export function lossClassFor(article: string, contents: readonly { metal: MetalI
 	if (kind === 'dental') return 'dental';
 	if (precious.n === 0n) return 'base';
 	if (kind === 'bar') return 'bar';
-	if (words.some((word) => STONE_WORDS.has(word))) return 'stone-set';
+	if (!stonesTakenOff && words.some((word) => STONE_WORDS.has(word))) return 'stone-set';
 	if (compareExact(gold, ZINC_SOLDER_FROM) >= 0 && compareExact(gold, ZINC_SOLDER_TO) <= 0) return 'zinc-solder';
 	if (kind === 'chain' || kind === 'bracelet' || kind === 'watch' || words.includes('worn')) return 'worn';
 	// a rolled or filled layer: most of the piece is base metal under the gold

@@ -1,7 +1,6 @@
-import { decimal, type Decimal } from '../number/decimal.ts';
+import { assert, decimal, type Decimal } from '../number/decimal.ts';
 import { compareExact, exact, plus, times, toNumber, EXACT_ZERO, type Exact } from '../number/exact.ts';
 import { fail, ok, type Result } from '../number/result.ts';
-import { assert } from '../number/decimal.ts';
 import { propagate, uncertain, type Uncertain } from '../uncertainty/uncertain.ts';
 import type { Mass } from '../mass/mass.ts';
 import type { Scale } from '../mass/scale.ts';
@@ -39,7 +38,8 @@ export type Piece = {
 export type PieceProblem =
 	| { readonly kind: 'piece-count-not-whole'; readonly count: number }
 	| { readonly kind: 'piece-no-mass'; readonly gross: Decimal }
-	| { readonly kind: 'piece-mass-too-many-places'; readonly grams: Decimal; readonly most: number }
+	| { readonly kind: 'piece-mass-too-many-digits'; readonly value: Decimal; readonly most: number; readonly mostPlaces: number }
+	| { readonly kind: 'piece-division-not-positive'; readonly division: Decimal }
 	| { readonly kind: 'piece-deduction-negative'; readonly what: string; readonly grams: Decimal }
 	| { readonly kind: 'piece-deductions-over-gross'; readonly gross: Decimal; readonly deductions: Decimal }
 	| { readonly kind: 'piece-metal-twice'; readonly metal: MetalId }
@@ -47,8 +47,12 @@ export type PieceProblem =
 	| { readonly kind: 'piece-contents-over-1000'; readonly perMille: Exact };
 
 const MOST_COUNT = 1_000_000;
-/** 40 digits hold the sums of millions of pieces only while no mass is finer than this. */
-const MOST_PLACES = 20;
+/** 40 digits hold the sums of millions of pieces only while no reading is longer or finer than this. */
+const MOST_DIGITS = 15;
+const MOST_PLACES = 12;
+/** For deductions, which are in grams already. */
+const MOST_GRAM_DIGITS = 30;
+const MOST_GRAM_PLACES = 22;
 const THOUSAND = exact(decimal('1000'));
 
 /**
@@ -60,10 +64,15 @@ const THOUSAND = exact(decimal('1000'));
 export function netMass(piece: Piece): Result<Mass, PieceProblem> {
 	const { count } = piece;
 	if (!Number.isSafeInteger(count) || count < 1 || count > MOST_COUNT) return fail({ kind: 'piece-count-not-whole', count });
+	const { reading, repeats, tare, division } = piece.weighing;
+	if (division !== null && !division.gt(0)) return fail({ kind: 'piece-division-not-positive', division });
+	for (const value of [reading, ...repeats, tare, division]) {
+		if (value !== null && longer(value, MOST_DIGITS, MOST_PLACES)) return tooLong(value, MOST_DIGITS, MOST_PLACES);
+	}
 	const gross = massOf(piece.weighing).grams;
 	if (!gross.gt(0)) return fail({ kind: 'piece-no-mass', gross });
-	for (const grams of [gross, ...piece.deductions.map(({ mass }) => mass.grams)]) {
-		if (grams.decimalPlaces() > MOST_PLACES) return fail({ kind: 'piece-mass-too-many-places', grams, most: MOST_PLACES });
+	for (const { mass } of piece.deductions) {
+		if (longer(mass.grams, MOST_GRAM_DIGITS, MOST_GRAM_PLACES)) return tooLong(mass.grams, MOST_GRAM_DIGITS, MOST_GRAM_PLACES);
 	}
 	for (const { what, mass } of piece.deductions) {
 		if (mass.grams.lt(0)) return fail({ kind: 'piece-deduction-negative', what, grams: mass.grams });
@@ -72,6 +81,14 @@ export function netMass(piece: Piece): Result<Mass, PieceProblem> {
 	if (deductions.gt(gross)) return fail({ kind: 'piece-deductions-over-gross', gross, deductions });
 	const contents = checkContents(piece.contents);
 	return contents.ok ? ok({ grams: gross.minus(deductions) }) : contents;
+}
+
+function longer(value: Decimal, digits: number, places: number): boolean {
+	return !value.isFinite() || value.precision(true) > digits || value.decimalPlaces() > places;
+}
+
+function tooLong(value: Decimal, most: number, mostPlaces: number): Result<never, PieceProblem> {
+	return fail({ kind: 'piece-mass-too-many-digits', value, most, mostPlaces });
 }
 
 function checkContents(contents: readonly Content[]): Result<null, PieceProblem> {
@@ -130,10 +147,11 @@ export function estimate(
 	scale?: Scale,
 	spreads: Partial<Readonly<Record<SpreadId, Spread>>> = {}
 ): Estimate {
-	const grams = netOf(piece).grams.toNumber();
-	const gross = massUncertainty(piece.weighing, key, scale);
+	const exactNet = netOf(piece).grams;
+	const used = scale !== undefined && scale.id === piece.weighing.scale ? scale : null;
+	const gross = massUncertainty(piece.weighing, key, used);
 	const deducted = uncertain(0, `deduction:${key}`, -totalDeductionU(piece.deductions));
-	const net = propagate(grams, [
+	const net = propagate(exactNet.toNumber(), [
 		{ input: gross, sensitivity: 1 },
 		{ input: deducted, sensitivity: 1 }
 	]);
@@ -142,7 +160,7 @@ export function estimate(
 	const fine: Partial<Record<MetalId, Uncertain>> = {};
 	for (const { metal, taken } of piece.contents) {
 		const share = toNumber(shareOf(taken));
-		const value = toNumber(times(exact(netOf(piece).grams), shareOf(taken)));
+		const value = toNumber(times(exact(exactNet), shareOf(taken)));
 		fine[metal] = propagate(value, [
 			{ input: net, sensitivity: share },
 			{ input: uncertain(1, shared, spread.shared), sensitivity: value },
