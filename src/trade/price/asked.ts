@@ -48,7 +48,7 @@ export function askedFor(value: Exact, price: Money): Asked {
  * The chance that the metal is worth less than was paid when it is sold after so many days.
  * formula: Φ(−ln(1 + margin) ÷ (σ √(days ÷ 365)))
  * rounding: none, an estimate.
- * source: the lognormal price of common practice, no source; printed example: 30 days, 8 %, 25 % a year: 14 %.
+ * source: the lognormal price of common practice, no source; worked example from memory: 30 days, 8 %, 25 % a year: 14 %.
  */
 export function chanceOfLoss(margin: number, volatility: number, days: number): number {
 	assert(margin >= -1, `a margin of ${margin} is a value under nothing`);
