@@ -1,5 +1,6 @@
 import { fileURLToPath } from 'node:url';
 import { sveltekit } from '@sveltejs/kit/vite';
+import { svelte, vitePreprocess } from '@sveltejs/vite-plugin-svelte';
 import { defineConfig } from 'vitest/config';
 
 const here = (path: string) => fileURLToPath(new URL(path, import.meta.url));
@@ -11,14 +12,18 @@ export default defineConfig({
 	test: {
 		projects: [
 			{
-				resolve: { alias },
+				// runes in .svelte.ts files work as in the page: Svelte's own build for the browser
+				plugins: [svelte({ configFile: false, preprocess: vitePreprocess() })],
+				resolve: { alias, conditions: ['browser', 'development'] },
 				test: {
 					name: 'unit',
 					include: ['test/**/*.test.ts'],
-					exclude: ['test/published/**', 'test/browser/**', 'test/bench/**']
+					exclude: ['test/published/**', 'test/browser/**', 'test/bench/**'],
+					// properties run a thousand cases and more on whatever machine there is
+					testTimeout: 60_000
 				}
 			},
-			{ resolve: { alias }, test: { name: 'published', include: ['test/published/**/*.test.ts'] } },
+			{ resolve: { alias }, test: { name: 'published', include: ['test/published/**/*.test.ts'], testTimeout: 60_000 } },
 			{
 				resolve: { alias },
 				test: {
