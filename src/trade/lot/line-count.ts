@@ -41,7 +41,9 @@ export function readCounts(
 			const bareAfter = number(at + 1) && !isStamp(tokens[at + 1]!.text) && !karatFollows(tokens, at + 1);
 			const whole = (place: number) => number(place) && /^\d+$/.test(tokens[place]!.text);
 			if (number(at - 1) && (massAfter || bareAfter)) {
-				const decimals = bareAfter && !whole(at - 1) && whole(at + 1);
+				// "5.2 x 3", "925 x3" and "5 x3" leave no doubt which of the two is the count
+				const suffix = !token.glued && tokens[at + 1]!.glued;
+				const decimals = bareAfter && whole(at + 1) && (!whole(at - 1) || suffix || isStamp(tokens[at - 1]!.text));
 				if (!decimals) {
 					const end = massAfter ? amounts.find(({ start }) => start === tokens[at + 1]!.start)!.end : tokens[at + 1]!.end;
 					const start = tokens[at - 1]!.start;

@@ -1,4 +1,5 @@
 import { decimal, type Decimal } from '../number/decimal.ts';
+import { reduce } from '../number/exact.ts';
 import { fail, ok, type Result } from '../number/result.ts';
 import type { Mass } from '../mass/mass.ts';
 import { toMass } from '../mass/units.ts';
@@ -63,8 +64,9 @@ export function makePiece(found: Findings): Result<Piece, LineProblem> {
 	return piece.ok ? piece : fail({ kind: 'line-piece', problem: piece.problem });
 }
 
+/** In lowest terms, so that a piece reads back as the same from any text. */
 export function contentsOf(mark: Mark | null, coin: Coin | null): Content[] {
-	return (mark ?? coin)?.contents.map(({ metal, fineness }) => ({ metal, taken: fineness })) ?? [];
+	return (mark ?? coin)?.contents.map(({ metal, fineness }) => ({ metal, taken: { perMille: reduce(fineness.perMille) } })) ?? [];
 }
 
 /**
@@ -85,6 +87,11 @@ const weighed = ({ amounts }: Findings) => amounts.some(({ off }) => !off);
 
 function place(line: string, { start, end }: { start: number; end: number }): Place {
 	return { start, end, found: line.slice(start, end) };
+}
+
+/** The number of an amount without its unit. */
+function figure({ start, typed }: Amount): Place {
+	return { start, end: start + typed.length, found: typed };
 }
 
 function readCount({ line, counts, options }: Findings): Result<number, LineProblem> {
@@ -119,7 +126,7 @@ function readGross(found: Findings, count: number): Result<Weighing, LineProblem
 	});
 	if (!read.ok) {
 		if (read.problem.kind === 'mass-tare-not-less') return fail({ kind: 'line-mass-missing', unsure: place(line, first) });
-		return fail({ kind: 'line-number', start: first.start, end: first.end, found: first.typed, problem: read.problem });
+		return fail({ kind: 'line-number', ...figure(first), problem: read.problem });
 	}
 	if (coin !== null) {
 		const [legal, given] = [coin.coin.mass.grams.times(count), massOf(read.value).grams];
@@ -142,7 +149,7 @@ function readDeductions({ line, amounts, options }: Findings, gross: Mass, mark:
 	const taken = grossAmounts(amounts);
 	const deductions: Deduction[] = [];
 	for (const amount of amounts.filter((each) => !taken.includes(each))) {
-		const number = readNumber(amount.typed, amount.start, amount.end, options.mark);
+		const number = readNumber(amount.typed, amount.start, figure(amount).end, options.mark);
 		if (!number.ok) return number;
 		const mass: Mass = amount.unit === null ? share(gross, number.value) : toMass(number.value, amount.unit);
 		deductions.push(statedDeduction(amount.what ?? 'other', mass, line.slice(amount.start, amount.end)));
