@@ -42,14 +42,13 @@ export function coinById(id: string): Coin | null {
 /** A coin by what people call it; a year beside it and the word "coin" are left aside, plurals understood. */
 export function findCoin(text: string): Result<Coin, CoinProblem> {
 	const shown = text.trim().replace(/\s+/g, ' ').slice(0, 60);
-	const plain = shown
-		.toLowerCase()
-		.replaceAll('-', ' ')
+	const whole = shown.toLowerCase().replaceAll('-', ' ');
+	const plain = whole
 		.replace(/\b(?:1[5-9]|20)\d\d\b/g, ' ')
 		.replace(/\bcoins?\b/g, ' ')
 		.replace(/\s+/g, ' ')
 		.trim();
-	const found = byName.get(plain) ?? byName.get(plain.replace(/s$/, '')) ?? [];
+	const found = byName.get(whole) ?? byName.get(plain) ?? byName.get(plain.replace(/s$/, '')) ?? [];
 	const [only] = found;
 	if (only === undefined) return fail({ kind: 'coin-unknown', text: shown });
 	if (found.length > 1) return fail({ kind: 'coin-ambiguous', text: shown, choices: found.map((coin) => coin.name) });
