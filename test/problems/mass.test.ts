@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { parseUnit, type MassUnitId, type UnitProblem } from '../../src/trade/mass/units.ts';
-import type { Scale } from '../../src/trade/mass/scale.ts';
+import { checkScale, type Scale, type ScaleProblem } from '../../src/trade/mass/scale.ts';
 import {
 	sameLoad, warnings, weighing, type SameLoadProblem, type Weighing, type WeighingProblem, type WeighingWarning
 } from '../../src/trade/mass/weighing.ts';
@@ -9,7 +9,7 @@ import type { NumberProblem } from '../../src/trade/number/field.ts';
 import type { Result } from '../../src/trade/number/result.ts';
 
 type OfWeighing = Exclude<WeighingProblem['kind'], NumberProblem['kind']>;
-type Kind = UnitProblem['kind'] | OfWeighing | SameLoadProblem['kind'] | WeighingWarning['kind'];
+type Kind = UnitProblem['kind'] | OfWeighing | SameLoadProblem['kind'] | WeighingWarning['kind'] | ScaleProblem['kind'];
 
 function problemOf<P>(result: Result<unknown, P>): P {
 	if (result.ok) throw new Error('no problem where one was wanted');
@@ -35,7 +35,9 @@ const reproductions: Record<Kind, () => { readonly kind: string }> = {
 	'mass-changed': () => problemOf(sameLoad(taken('12.40', 'g'), taken('11.90', 'g'))),
 	'load-under-minimum': () => warnings(taken('4.9', 'g', { scale: counter }), counter)[0]!,
 	'load-under-fifty-divisions': () => warnings(taken('0.12', 'g'))[0]!,
-	'reading-between-divisions': () => warnings(taken('12.34', 'g', { scale: counter }), counter)[0]!
+	'reading-between-divisions': () => warnings(taken('12.34', 'g', { scale: counter }), counter)[0]!,
+	'scale-name-missing': () => problemOf(checkScale({ ...counter, name: ' ' })),
+	'scale-verification-under-division': () => problemOf(checkScale({ ...counter, verification: decimal('0.01') }))
 };
 
 describe('what can be wrong with a weighing', () => {

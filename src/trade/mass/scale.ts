@@ -1,5 +1,6 @@
 import { decimal, type Decimal } from '../number/decimal.ts';
 import { compareExact, exact, ratio } from '../number/exact.ts';
+import { fail, ok, type Result } from '../number/result.ts';
 import type { Mass } from './mass.ts';
 import { toMass, type MassUnitId } from './units.ts';
 
@@ -18,6 +19,23 @@ export type Scale = {
 	/** The day of its last check, as text; null: never. */
 	readonly checkedOn: string | null;
 };
+
+export type ScaleProblem =
+	| { readonly kind: 'scale-name-missing' }
+	| {
+			readonly kind: 'scale-verification-under-division';
+			readonly verification: Decimal;
+			readonly division: Decimal;
+			readonly unit: MassUnitId;
+	  };
+
+/** A scale as described by the buyer: it has a name, and e is no finer than the display (OIML R 76-1:2006, 3.4.2, from memory). */
+export function checkScale(scale: Scale): Result<Scale, ScaleProblem> {
+	const { name, verification, division, unit } = scale;
+	if (name.trim() === '') return fail({ kind: 'scale-name-missing' });
+	if (verification.lt(division)) return fail({ kind: 'scale-verification-under-division', verification, division, unit });
+	return ok(scale);
+}
 
 /** Loads in e up to which the error may be 0.5 e, and up to which it may be 1 e; above it is 1.5 e. */
 const BANDS: Readonly<Record<AccuracyClass, readonly [half: bigint, whole: bigint]>> = {
@@ -45,6 +63,29 @@ export function maximumPermissibleError(scale: Scale, load: Mass, occasion: Occa
 	const steps = compareExact(counted, exact(half)) <= 0 ? '0.5' : compareExact(counted, exact(whole)) <= 0 ? '1' : '1.5';
 	const error = e.times(decimal(steps));
 	return { grams: occasion === 'inService' ? error.times(2) : error };
+}
+
+export type ErrorBand = {
+	/** The largest load of the band; null: whatever the scale can hold. */
+	readonly upTo: Mass | null;
+	readonly error: Mass;
+};
+
+/**
+ * What it is: the permitted errors of a verified scale as bands of load, for a person to read; none without a class.
+ * formula: 0.5 e up to the first limit, 1 e up to the second, 1.5 e above (limits in e as in maximumPermissibleError). In grams.
+ * rounding: none.
+ * source: OIML R 76-1:2006, 3.5.1 table 6.
+ */
+export function errorBands(scale: Scale): readonly ErrorBand[] {
+	if (scale.accuracyClass === null) return [];
+	const e = toMass(scale.verification, scale.unit).grams;
+	const [half, whole] = BANDS[scale.accuracyClass];
+	return [
+		{ upTo: { grams: e.times(half.toString()) }, error: { grams: e.times(decimal('0.5')) } },
+		{ upTo: { grams: e.times(whole.toString()) }, error: { grams: e } },
+		{ upTo: null, error: { grams: e.times(decimal('1.5')) } }
+	];
 }
 
 const FIRST_COARSE_E = decimal('0.1');

@@ -1,11 +1,12 @@
 import type { Mass } from '$trade/mass/mass.ts';
+import type { ScaleProblem } from '$trade/mass/scale.ts';
 import { massUnits, type UnitProblem } from '$trade/mass/units.ts';
 import type { SameLoadProblem, WeighingProblem, WeighingWarning } from '$trade/mass/weighing.ts';
 import type { NumberProblem } from '$trade/number/field.ts';
 import type { Format } from '../format.ts';
 
 /** What is wrong or doubtful with a typed unit or a weighing. */
-export type MassProblem = UnitProblem | Exclude<WeighingProblem, NumberProblem> | SameLoadProblem | WeighingWarning;
+export type MassProblem = UnitProblem | Exclude<WeighingProblem, NumberProblem> | SameLoadProblem | WeighingWarning | ScaleProblem;
 
 export function massSentence(problem: MassProblem, format: Format): string {
 	const grams = (load: Mass): string => format.mass(load.grams);
@@ -40,6 +41,12 @@ export function massSentence(problem: MassProblem, format: Format): string {
 		case 'reading-between-divisions': {
 			const [reading, step] = [format.mass(problem.reading, problem.unit), format.mass(problem.division, problem.unit)];
 			return `A scale that steps by ${step} cannot show ${reading}. Check the reading, or which scale was used.`;
+		}
+		case 'scale-name-missing':
+			return 'Give the scale a name, so that you know it among others: counter scale, pocket scale.';
+		case 'scale-verification-under-division': {
+			const [e, d] = [format.mass(problem.verification, problem.unit), format.mass(problem.division, problem.unit)];
+			return `A display that steps by ${d} cannot be verified to ${e}. On the plate of the scale, e is never smaller than d: were the two swapped?`;
 		}
 	}
 }

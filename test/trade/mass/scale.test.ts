@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { mass } from '../../../src/trade/mass/mass.ts';
-import { maximumPermissibleError, minimumLoad, type AccuracyClass, type Scale } from '../../../src/trade/mass/scale.ts';
+import { checkScale, errorBands, maximumPermissibleError, minimumLoad, type AccuracyClass, type Scale } from '../../../src/trade/mass/scale.ts';
 import { toMass } from '../../../src/trade/mass/units.ts';
 import { decimal, Decimal } from '../../../src/trade/number/decimal.ts';
 
@@ -47,5 +47,34 @@ describe('the least load', () => {
 	it('changes for class II at e = 0.1 g, also on a troy scale', () => {
 		expect(minimumLoad(scale('II', '0.001', 'ozt')).grams.equals(toMass(decimal('0.02'), 'ozt').grams)).toBe(true);
 		expect(minimumLoad(scale('II', '0.01', 'ozt')).grams.equals(toMass(decimal('0.5'), 'ozt').grams)).toBe(true);
+	});
+});
+
+describe('the permitted errors by load', () => {
+	it('are none without a class', () => {
+		expect(errorBands(scale(null, '0.01'))).toEqual([]);
+	});
+
+	it.each(['I', 'II', 'III', 'IIII'] as const)('say for class %s what the error at a load says, on both sides of each limit', (class_) => {
+		const s = scale(class_, '0.1', 'dwt');
+		const bands = errorBands(s);
+		expect(bands).toHaveLength(3);
+		const little = decimal('0.000001');
+		for (const [index, { upTo, error }] of bands.entries()) {
+			const above = upTo === null ? bands[index - 1]!.upTo!.grams.plus(little) : upTo.grams;
+			expect(maximumPermissibleError(s, { grams: above })!.grams.equals(error.grams)).toBe(true);
+			if (upTo === null) continue;
+			expect(maximumPermissibleError(s, { grams: upTo.grams.plus(little) })!.grams.equals(bands[index + 1]!.error.grams)).toBe(true);
+		}
+	});
+});
+
+describe('a scale as described', () => {
+	it('needs a name, and an interval that its display can show', () => {
+		expect(checkScale({ ...scale('II', '0.1'), name: '' })).toEqual({ ok: false, problem: { kind: 'scale-name-missing' } });
+		const fine = { ...scale('II', '0.1'), verification: decimal('0.05') };
+		expect(checkScale(fine)).toMatchObject({ ok: false, problem: { kind: 'scale-verification-under-division', unit: 'g' } });
+		const usual = { ...scale('II', '0.1'), division: decimal('0.01') };
+		expect(checkScale(usual)).toEqual({ ok: true, value: usual });
 	});
 });
