@@ -7,8 +7,11 @@ export function numberSentence(problem: NumberProblem): string {
 			return 'A number is needed here.';
 		case 'number-unreadable':
 			return `“${problem.text}” is not a number we can read. Write it like 12.30 or 12,30.`;
-		case 'number-ambiguous':
-			return `“${problem.text}” can be read as ${problem.asDecimal} or as ${problem.asThousands}. Which is it?`;
+		case 'number-ambiguous': {
+			// neither mark is used here, because the mark is what is in question
+			const whole = problem.asDecimal.split('.')[0] ?? '0';
+			return `“${problem.text}” can be read two ways: a little over ${whole}, or ${problem.asThousands}. Which is it?`;
+		}
 		case 'number-negative':
 			return `“${problem.text}” is below zero; this must be zero or more.`;
 		case 'number-not-positive':
