@@ -50,7 +50,8 @@ describe('coins of the United Kingdom', () => {
 describe('coins of the United States', () => {
 	// source: 31 U.S.C. 5112(a)(7) to (10): mass, diameter and fine gold
 	it.each([
-		['us-eagle-50', '33.931', '32.7', 1], ['us-eagle-25', '16.966', '27.0', 0.5], ['us-eagle-10', '8.483', '22.0', 0.25], ['us-eagle-5', '3.393', '16.5', 0.1]
+		['us-eagle-50', '33.931', '32.7', 1], ['us-eagle-25', '16.966', '27.0', 0.5], ['us-eagle-10', '8.483', '22.0', 0.25],
+		['us-eagle-5', '3.393', '16.5', 0.1]
 	])('%s weighs %s g, measures %s mm and holds %s ozt', (id, grams, diameter, ounce) => {
 		expect(coin(id).mass.grams.toString()).toBe(grams);
 		expect(coin(id).diameter).toBe(diameter);
@@ -64,7 +65,8 @@ describe('coins of the United States', () => {
 	});
 
 	// source: gold of 900 parts per thousand at 25.8 grains a dollar, 23.22 grains fine, as printed in banking handbooks of the time
-	it.each([['us-double-eagle', 20], ['us-10-gold', 10], ['us-5-gold', 5], ['us-2.5-gold', 2.5]])('%s weighs 25.8 grains a dollar', (id, dollars) => {
+	const dollarCoins = [['us-double-eagle', 20], ['us-10-gold', 10], ['us-5-gold', 5], ['us-2.5-gold', 2.5]] as const;
+	it.each(dollarCoins)('%s weighs 25.8 grains a dollar', (id, dollars) => {
 		expect(coin(id).mass.grams.toNumber()).toBeCloseTo(25.8 * dollars * GRAIN, 9);
 		expect(toNumber(fine(id))).toBeCloseTo(23.22 * dollars * GRAIN, 9);
 	});
@@ -108,7 +110,10 @@ describe('coins of the United States', () => {
 
 describe('coins of other places', () => {
 	// source: published figures of the Krugerrand: 33.9305, 16.9653, 8.4826 and 3.3931 g with 1, 1/2, 1/4 and 1/10 ozt fine
-	it.each([['krugerrand', '33.9311', 33.9305], ['krugerrand-half', '16.9655', 16.9653], ['krugerrand-quarter', '8.4828', 8.4826], ['krugerrand-tenth', '3.3931', 3.3931]])(
+	it.each([
+		['krugerrand', '33.9311', 33.9305], ['krugerrand-half', '16.9655', 16.9653], ['krugerrand-quarter', '8.4828', 8.4826],
+		['krugerrand-tenth', '3.3931', 3.3931]
+	])(
 		'%s weighs 12/11 of its fine gold: %s g',
 		(id, grams, printed) => {
 			expect(round(coin(id).mass.grams, decimal('0.0001'), 'half-even').toFixed(4)).toBe(grams);
@@ -134,7 +139,8 @@ describe('coins of other places', () => {
 		expect(toNumber(fine('rupee-silver'))).toBeCloseTo(165 * GRAIN, 9);
 	});
 
-	// source: mint specifications, from memory: Austrian ducat 3.4909 g with 3.442 g of gold; 50 pesos 37.5 g of gold; thaler 23.39 g of silver
+	// source: mint specifications, from memory: Austrian ducat 3.4909 g with 3.442 g of gold; 50 pesos 37.5 g of gold; thaler
+	// 23.39 g of silver
 	it('ducat, 50 pesos and thaler hold what their mints say', () => {
 		expect(toNumber(fine('ducat'))).toBeCloseTo(3.442, 3);
 		expect(toNumber(fine('pesos-50'))).toBeCloseTo(37.5, 3);

@@ -124,7 +124,8 @@ describe('facts of the trade', () => {
 
 describe('elements', () => {
 	// source: CRC Handbook of Chemistry and Physics, boiling points in °C, seen in a copy
-	it.each([['Zn', 907], ['Cd', 767], ['Pb', 1749], ['Ag', 2162], ['Cu', 2560], ['Au', 2836]] as const)('%s boils at %s °C', (metal, celsius) => {
+	const boiling = [['Zn', 907], ['Cd', 767], ['Pb', 1749], ['Ag', 2162], ['Cu', 2560], ['Au', 2836]] as const;
+	it.each(boiling)('%s boils at %s °C', (metal, celsius) => {
 		expect(metals[metal].boiling).toBe(celsius);
 	});
 

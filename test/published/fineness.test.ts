@@ -14,8 +14,8 @@ const printed = (karats: string) => round(fromKarat(decimal(karats)).perMille, c
 describe('karat in parts per thousand', () => {
 	// source: arithmetic, as in printed karat lists (k / 24 x 1000 to two places)
 	it.each([
-		['8', '333.33'], ['9', '375.00'], ['10', '416.67'], ['12', '500.00'], ['14', '583.33'], ['18', '750.00'], ['21', '875.00'], ['22', '916.67'],
-		['24', '1000.00']
+		['8', '333.33'], ['9', '375.00'], ['10', '416.67'], ['12', '500.00'], ['14', '583.33'], ['18', '750.00'], ['21', '875.00'],
+		['22', '916.67'], ['24', '1000.00']
 	])('%s kt is %s', (karats, perMille) => {
 		expect(printed(karats)).toBe(perMille);
 		// second route: whole numbers only, hundredths of a part per thousand rounded half up
@@ -40,7 +40,8 @@ describe('karat in parts per thousand', () => {
 
 describe('fineness as a minimum', () => {
 	// source: Tukes (Finland), articles of precious metals, fineness requirements: gold of 588 takes mark 585, of 584 takes 375
-	it.each([['588', '585'], ['584', '375'], ['585', '585'], ['916', '916'], ['998.9', '916']])('gold of %s takes mark %s', (fineness, mark) => {
+	const taken = [['588', '585'], ['584', '375'], ['585', '585'], ['916', '916'], ['998.9', '916']] as const;
+	it.each(taken)('gold of %s takes mark %s', (fineness, mark) => {
 		expect(exactToText(largestMark(fromPerMille(decimal(fineness)))!.perMille)).toBe(mark);
 	});
 
@@ -54,7 +55,8 @@ describe('fineness as a minimum', () => {
 
 	// source: ISO 9202 (minus tolerances are not allowed), seen in its published scope
 	it('the minimum law takes nothing off', () => {
-		const least = legalMinimum({ metal: 'Au', fineness: fromPerMille(decimal('585')) }, 'minimum', { solder: true, watchCaseOrFlatware: false });
+		const mark = { metal: 'Au', fineness: fromPerMille(decimal('585')) } as const;
+		const least = legalMinimum(mark, 'minimum', { solder: true, watchCaseOrFlatware: false });
 		expect(perMilleNumber(least)).toBe(585);
 	});
 });
@@ -75,7 +77,8 @@ describe('tolerances of the National Stamping Act', () => {
 	// source: 15 U.S.C. 295, notes on the 1976 amendment: before it, half a carat; one carat with solder; watch cases and flatware
 	// three one-thousandths
 	it.each([
-		['14', false, false, '562.50'], ['14', true, false, '541.67'], ['14', false, true, '580.33'], ['18', false, false, '729.17'], ['10', true, false, '375.00']
+		['14', false, false, '562.50'], ['14', true, false, '541.67'], ['14', false, true, '580.33'], ['18', false, false, '729.17'],
+		['10', true, false, '375.00']
 	])('before 1981: %s kt, solder %s, watch case or flatware %s: at least %s', (karats, solder, flat, perMille) => {
 		expect(least(karats, 'us-before-1981', solder, flat)).toBe(perMille);
 	});

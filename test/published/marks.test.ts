@@ -14,7 +14,8 @@ const claim = (text: string) => {
 describe('marks of the United Kingdom', () => {
 	// source: Hallmarking Act 1973 Sch. 2 Part I: gold 375, 585, 750, 916.6 (struck 916); silver 925, 958.4 (Britannia); platinum 950
 	it.each([
-		['375', 'Au 375'], ['585', 'Au 585'], ['750', 'Au 750'], ['916.6', 'Au 4583/5'], ['916', 'Au 916'], ['925', 'Ag 925'], ['958.4', 'Ag 4792/5'],
+		['375', 'Au 375'], ['585', 'Au 585'], ['750', 'Au 750'], ['916.6', 'Au 4583/5'], ['916', 'Au 916'], ['925', 'Ag 925'],
+		['958.4', 'Ag 4792/5'],
 		['Britannia', 'Ag 4792/5'], ['Pt 950', 'Pt 950']
 	])('%s promises %s', (mark, promised) => expect(claim(mark)).toBe(promised));
 
@@ -81,7 +82,8 @@ describe('marks of the world', () => {
 		for (const fineness of list) expect(claim(`${metal}${fineness}`)).toBe(`${metal} ${fineness}`);
 	});
 
-	// source: lists of millesimal stamps in common practice: 333 is 8 kt, 417 is 10 kt, 583 is 14 kt (Soviet), 875 is 21 kt gold or Soviet silver
+	// source: lists of millesimal stamps in common practice: 333 is 8 kt, 417 is 10 kt, 583 is 14 kt (Soviet), 875 is 21 kt gold or
+	// Soviet silver
 	it('stamps that stand for karats are within half a part per thousand of them', () => {
 		for (const [stamp, karats] of [['333', 8], ['375', 9], ['417', 10], ['583', 14], ['625', 15], ['750', 18], ['917', 22]] as const) {
 			expect(claim(stamp)).toBe(`Au ${stamp}`);

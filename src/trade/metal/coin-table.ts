@@ -1,9 +1,26 @@
 import { decimal } from '../number/decimal.ts';
 import { ratio } from '../number/exact.ts';
-import type { Coin, CoinLife } from './coins.ts';
+import type { Mass } from '../mass/mass.ts';
 import { fromPerMille, fromShare } from './fineness.ts';
 import type { MarkContent } from './mark.ts';
 import type { MetalId } from './metals.ts';
+
+/** How a coin has lived: bullion was never spent; a circulated coin has lost metal in pockets and tills. */
+export type CoinLife = 'bullion' | 'circulated-gold' | 'circulated-silver' | 'circulated-base';
+
+export type Coin = {
+	readonly id: string;
+	readonly name: string;
+	/** What people type, in lower case; a name shared by several coins is asked about. */
+	readonly names: readonly string[];
+	/** The mass by law or by the mint's specification, new. */
+	readonly mass: Mass;
+	readonly contents: readonly MarkContent[];
+	/** mm; null where it is not known to us. */
+	readonly diameter: string | null;
+	readonly life: CoinLife;
+	readonly source: string;
+};
 
 // masses by law in grains or ounces are written so and turned into grams exactly
 const g = (text: string) => ({ grams: decimal(text) });
@@ -192,7 +209,8 @@ export const coinTable: readonly Coin[] = [
 	),
 	coin(
 		'rupee-silver', 'Rupee, silver, to 1939', ['silver rupee', 'rupee'],
-		grains('180'), [share('Ag', 11n, 12n)], '30.5', 'circulated-silver', 'Indian Coinage Act 1906 (180 grains, eleven twelfths), from memory'
+		grains('180'), [share('Ag', 11n, 12n)], '30.5', 'circulated-silver',
+		'Indian Coinage Act 1906 (180 grains, eleven twelfths), from memory'
 	),
 	coin(
 		'thaler-maria-theresa', 'Maria Theresa thaler', ['maria theresa', 'thaler', 'mtt'],

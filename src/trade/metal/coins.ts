@@ -1,25 +1,8 @@
 import { fail, ok, type Result } from '../number/result.ts';
-import type { Mass } from '../mass/mass.ts';
 import { uncertain, type Uncertain } from '../uncertainty/uncertain.ts';
-import { coinTable } from './coin-table.ts';
-import type { MarkContent } from './mark.ts';
+import { coinTable, type Coin, type CoinLife } from './coin-table.ts';
 
-/** How a coin has lived: bullion was never spent; a circulated coin has lost metal in pockets and tills. */
-export type CoinLife = 'bullion' | 'circulated-gold' | 'circulated-silver' | 'circulated-base';
-
-export type Coin = {
-	readonly id: string;
-	readonly name: string;
-	/** What people type, in lower case; a name shared by several coins is asked about. */
-	readonly names: readonly string[];
-	/** The mass by law or by the mint's specification, new. */
-	readonly mass: Mass;
-	readonly contents: readonly MarkContent[];
-	/** mm; null where it is not known to us. */
-	readonly diameter: string | null;
-	readonly life: CoinLife;
-	readonly source: string;
-};
+export type { Coin, CoinLife };
 
 export type CoinProblem =
 	| { readonly kind: 'coin-unknown'; readonly text: string }

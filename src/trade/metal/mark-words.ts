@@ -39,15 +39,17 @@ export const coatedWords: ReadonlyMap<string, string> = new Map([
 /** Base metals and alloys by name: the composition is the trade's usual one and no promise of the piece. */
 export const alloyNames: ReadonlyMap<string, Alloy> = new Map<string, Alloy>([
 	...plainMetals(),
-	['brass', commonAlloys.brass], ['bronze', commonAlloys.bronze], ['copper', commonAlloys.copper], ['cupronickel', commonAlloys.cupronickel],
+	['brass', commonAlloys.brass], ['bronze', commonAlloys.bronze], ['cupronickel', commonAlloys.cupronickel],
 	['nickel silver', commonAlloys.nickelSilver], ['german silver', commonAlloys.nickelSilver], ['alpaca', commonAlloys.nickelSilver],
 	['alpaka', commonAlloys.nickelSilver], ['stainless steel', commonAlloys.stainless], ['stainless', commonAlloys.stainless]
 ]);
 
 /** Whole phrases that mean another spelling, so that the words below need not know them. */
 export const phrases: ReadonlyMap<string, string> = new Map([
-	['irid plat', 'Pt 900 Ir 100'], ['iridplat', 'Pt 900 Ir 100'], ['10% irid plat', 'Pt 900 Ir 100'], ['10 irid plat', 'Pt 900 Ir 100'],
-	['a1', 'silver plated'], ['quadruple plate', 'silver plated'], ['sheffield plate', 'silver plated'], ['silver on copper', 'silver plated'],
+	['irid plat', 'Pt 900 Ir 100'], ['iridplat', 'Pt 900 Ir 100'],
+	['10% irid plat', 'Pt 900 Ir 100'], ['10 irid plat', 'Pt 900 Ir 100'],
+	['a1', 'silver plated'], ['quadruple plate', 'silver plated'], ['sheffield plate', 'silver plated'],
+	['silver on copper', 'silver plated'],
 	['gold wash', 'gold plated'], ['gold electro', 'gold electroplate'], ['rolled gold', 'rolled gold plate']
 ]);
 

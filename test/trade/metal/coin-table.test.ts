@@ -14,7 +14,8 @@ const fine = (id: string) => {
 describe('the table of coins', () => {
 	it('holds exactly one ounce fine in a Krugerrand, and the parts of it in its parts', () => {
 		const ounce = decimal('31.1034768');
-		for (const [id, part] of [['krugerrand', '1'], ['krugerrand-half', '0.5'], ['krugerrand-quarter', '0.25'], ['krugerrand-tenth', '0.1']] as const) {
+		const parts = [['krugerrand', '1'], ['krugerrand-half', '0.5'], ['krugerrand-quarter', '0.25'], ['krugerrand-tenth', '0.1']] as const;
+		for (const [id, part] of parts) {
 			expect(compareExact(fine(id), exact(ounce.times(decimal(part)))), id).toBe(0);
 		}
 	});

@@ -10,7 +10,10 @@ const pure = (metal: Share['metal']): { shares: readonly Share[] } => ({ shares:
 
 /** Random alloys of two to five metals with whole parts in a thousand. */
 const alloys = fc
-	.tuple(fc.uniqueArray(fc.constantFrom(...metalIds), { minLength: 2, maxLength: 5 }), fc.array(fc.bigInt({ min: 1n, max: 999n }), { minLength: 5, maxLength: 5 }))
+	.tuple(
+		fc.uniqueArray(fc.constantFrom(...metalIds), { minLength: 2, maxLength: 5 }),
+		fc.array(fc.bigInt({ min: 1n, max: 999n }), { minLength: 5, maxLength: 5 })
+	)
 	.map(([ids, parts]) => {
 		const all = ids.reduce((total, _, index) => total + parts[index]!, 0n);
 		return { shares: ids.map((metal, index) => ({ metal, share: ratio(parts[index]!, all) })) };

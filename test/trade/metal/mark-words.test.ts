@@ -1,5 +1,8 @@
 import { describe, expect, it } from 'vitest';
-import { alloyNames, coatedWords, filledWords, fineWords, karatWords, phrases, plumbWords, rolledWords, silentWords, silverNames, weightedWords } from '../../../src/trade/metal/mark-words.ts';
+import {
+	alloyNames, coatedWords, filledWords, fineWords, karatWords, phrases, plumbWords, rolledWords, silentWords, silverNames, weightedWords
+} from '../../../src/trade/metal/mark-words.ts';
+import { perMilleNumber } from '../../../src/trade/metal/fineness.ts';
 import { parseMark } from '../../../src/trade/metal/mark.ts';
 import { metalWords } from '../../../src/trade/metal/stamps.ts';
 
@@ -20,6 +23,7 @@ describe('the words of stamps', () => {
 
 	it('take a base metal by its name as pure', () => {
 		const lead = parseMark('Lead');
-		expect(lead.ok && lead.value.contents.map(({ metal, fineness }) => [metal, fineness.perMille.n / fineness.perMille.d])).toEqual([['Pb', 1000n]]);
+		const contents = lead.ok ? lead.value.contents.map(({ metal, fineness }) => [metal, perMilleNumber(fineness)]) : null;
+		expect(contents).toEqual([['Pb', 1000]]);
 	});
 });
