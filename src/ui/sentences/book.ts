@@ -38,7 +38,10 @@ export function bookSentence(problem: BookProblem): string {
 				'Nothing is lost; go on with one of them.'
 			);
 		case 'storage-quota':
-			return 'Not saved: this device has no room left. Save without the photo, or make a backup and free some space. What you typed is still here.';
+			return (
+				'Not saved: this device has no room left. Save without the photo, or make a backup and free some space. ' +
+				'What you typed is still here.'
+			);
 		case 'storage-failed':
 			return `Not saved: the device refused (${problem.reason}). What you typed is still here; try again, and make a backup if it stays so.`;
 		case 'storage-lost':
