@@ -1,11 +1,14 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { decimal } from '../../../src/trade/number/decimal.ts';
 import { exactToText } from '../../../src/trade/number/exact.ts';
 import { massOf } from '../../../src/trade/mass/weighing.ts';
 import { parseLine, type LineOptions } from '../../../src/trade/lot/line.ts';
 import { fineOf, netOf } from '../../../src/trade/piece/piece.ts';
 import { hostile, nasty } from '../piece/some-pieces.ts';
+
+// a thousand lots take a while on a busy machine
+vi.setConfig({ testTimeout: 120_000 });
 
 const read = (line: string, options?: LineOptions) => {
 	const result = parseLine(line, options);

@@ -1,10 +1,13 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { exact, exactToText, type Exact } from '../../../src/trade/number/exact.ts';
 import { addPieces, emptySums, type LotSums } from '../../../src/trade/lot/sums.ts';
 import { readTable, type Table } from '../../../src/trade/lot/table.ts';
 import { writeTable } from '../../../src/trade/lot/table-written.ts';
 import { anyPiece, hostile } from '../piece/some-pieces.ts';
+
+// a thousand lots take a while on a busy machine
+vi.setConfig({ testTimeout: 120_000 });
 
 // grams of each unit in hundred-millionths, from the legal definitions
 const G = 100_000_000n;
