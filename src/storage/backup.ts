@@ -1,6 +1,6 @@
 import { fail, ok, type Result } from '$trade/number/result.ts';
 import { chainBreaks } from '$trade/record/chain.ts';
-import { canonicalJson, isJson, type Json } from '$trade/record/json.ts';
+import { asJson, canonicalJson, type Json } from '$trade/record/json.ts';
 import { checkBody } from '$trade/record/kind.ts';
 import { readRecord, type StoredRecord } from '$trade/record/record.ts';
 import {
@@ -160,7 +160,7 @@ async function photoLine(id: string, photo: PhotoRow | undefined): Promise<Line>
 }
 
 function damagedLine(key: string, reason: string, row: unknown): Line {
-	return { line: canonicalJson({ damaged: { key, reason, row: isJson(row) ? row : String(row) } }), holds: 'damage' };
+	return { line: canonicalJson({ damaged: { key, reason, row: asJson(row) } }), holds: 'damage' };
 }
 
 /** Lines through gzip to the target, in order. */

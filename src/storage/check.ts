@@ -46,8 +46,8 @@ export async function checkBook(session: Session, { onProgress, signal }: Runnin
 			if (readRecord(row).ok) shaped.push(row!);
 			if (why === null) whole.push(row!);
 			else {
-				findings.push({ kind: 'check-record-changed', record: ids[from + index]!, subject: String(row?.subject), why });
-				claimed.add(String(row?.hash));
+				findings.push({ kind: 'check-record-changed', record: ids[from + index]!, subject: textOf(row?.subject), why });
+				claimed.add(textOf(row?.hash));
 			}
 		}
 		onProgress?.({ step: 'reading', done: Math.min(from + AT_ONCE, ids.length), total: ids.length });
@@ -61,6 +61,8 @@ export async function checkBook(session: Session, { onProgress, signal }: Runnin
 	findings.push(...numberFindings(whole), ...(await standingFindings(session, shaped)), ...(await photoFindings(session, signal)));
 	return findings;
 }
+
+const textOf = (found: unknown) => (typeof found === 'string' ? found : '');
 
 function chainFinding(broken: ChainBreak): Finding {
 	const { device, record } = broken;

@@ -150,7 +150,7 @@ function contentOf(line: string, number: number): Content {
 		return damage(number, 'json');
 	}
 	const keys = typeof found === 'object' && found !== null ? Object.keys(found) : [];
-	if (keys.length !== 1 || !['record', 'photo', 'damaged'].includes(keys[0]!) || !isJson(found)) return damage(number, 'line');
+	if (keys.length !== 1 || !['record', 'photo', 'damaged'].includes(keys[0]!)) return damage(number, 'line');
 	return found as Content;
 }
 
@@ -177,6 +177,6 @@ async function photoFrom(found: Json, number: number): Promise<PhotoRow> {
 
 function damagedFrom(found: Json, number: number): DamagedRow {
 	const { key, reason, row } = (found ?? {}) as { readonly [key: string]: Json };
-	if (typeof key !== 'string' || typeof reason !== 'string' || row === undefined) return damage(number, 'line');
+	if (typeof key !== 'string' || typeof reason !== 'string' || !isJson(row)) return damage(number, 'line');
 	return { key, reason, row };
 }

@@ -12,9 +12,7 @@ type Link = Pick<StoredRecord, 'id' | 'device' | 'previous' | 'hash'>;
 /**
  * Follows each device's records from one to the next by `previous` and names what does not fit. Hashes are not recomputed
  * here; together with recomputed hashes a changed or missing record is found.
- * formula: every `previous` is null once per device, or the hash of exactly one other record of the device, each used once.
- * rounding: none.
- * source: hash chaining of log entries; common practice, no source.
+ * Whole means: every `previous` is null once per device, or the hash of another record of that device, each used once.
  */
 export function chainBreaks(records: Iterable<Link>, alsoThere: (hash: string) => boolean = () => false): ChainBreak[] {
 	const byHash = new Map<string, Link>();

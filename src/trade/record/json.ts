@@ -38,3 +38,18 @@ const MOST_DEPTH = 40;
 export function isList(value: Json): value is readonly Json[] {
 	return Array.isArray(value);
 }
+
+/**
+ * Anything as JSON, for keeping what cannot be read: what JSON cannot hold becomes text that tells what it was. Bytes become
+ * their numbers. Nothing thrown, whatever it is given.
+ */
+export function asJson(value: unknown, depth = 0): Json {
+	if (value === null || typeof value === 'boolean' || typeof value === 'string') return value;
+	if (typeof value === 'number') return Number.isFinite(value) ? value : `number ${value}`;
+	if (typeof value !== 'object') return typeof value === 'undefined' ? 'undefined' : `${typeof value} ${String(value as bigint)}`;
+	if (depth >= MOST_DEPTH - 10) return 'nested too deeply';
+	if (value instanceof ArrayBuffer) return { bytes: [...new Uint8Array(value)] };
+	if (value instanceof Date) return `date ${value.getTime()}`;
+	if (Array.isArray(value)) return value.map((item) => asJson(item, depth + 1));
+	return Object.fromEntries(Object.entries(value).map(([key, item]) => [key, asJson(item, depth + 1)]));
+}

@@ -71,6 +71,6 @@ export function readRecord(value: unknown): Result<StoredRecord, RecordProblem> 
 
 function shown(value: unknown): string {
 	if (value === undefined) return 'nothing';
-	const written = isJson(value) ? JSON.stringify(value) : String(value);
+	const written = isJson(value) ? JSON.stringify(value) : `something that is no JSON (${typeof value})`;
 	return written.length > 60 ? `${written.slice(0, 57)}...` : written;
 }

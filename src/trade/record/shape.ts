@@ -76,6 +76,13 @@ export const exactText = leaf<Exact>(
 	(value) => exactToText(value)
 );
 
+/** A decimal above zero, such as the division of a scale. */
+export const positiveText = leaf<Decimal>(
+	'a decimal above zero, as text',
+	(json) => (isText(json) && /^\d{1,60}(\.\d{1,60})?$/.test(json) && /[1-9]/.test(json) ? decimal(json) : undefined),
+	(value) => value.toFixed()
+);
+
 /** One word out of a closed list. */
 export function oneOf<T extends string>(words: readonly T[]): Shape<T> {
 	const known: ReadonlySet<string> = new Set(words);

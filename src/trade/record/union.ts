@@ -11,9 +11,6 @@ export function byTime(a: { at: number; id: string }, b: { at: number; id: strin
 /**
  * Two books put together: every record of both, once. The same result in any order and any number of times.
  * Two different records under one id cannot come from this program; the one with the smaller hash is kept, on every device.
- * formula: the union of two sets of records.
- * rounding: none.
- * source: a set that only grows, joined by union; common practice, no source.
  */
 export function unionOf(a: Iterable<StoredRecord>, b: Iterable<StoredRecord>): Map<string, StoredRecord> {
 	const all = new Map<string, StoredRecord>();

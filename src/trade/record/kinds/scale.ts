@@ -1,5 +1,5 @@
 import type { Scale } from '../../mass/scale.ts';
-import { decimalText, name, nullable, object, oneOf, text } from '../shape.ts';
+import { name, nullable, object, oneOf, positiveText, text } from '../shape.ts';
 import { massUnit } from './shared.ts';
 
 /** A scale of the shop. The record's subject is the scale's id. */
@@ -7,8 +7,8 @@ export const scaleShape = object<Scale>({
 	id: name,
 	name: text,
 	unit: massUnit,
-	division: decimalText,
-	verification: decimalText,
+	division: positiveText,
+	verification: positiveText,
 	accuracyClass: nullable(oneOf(['I', 'II', 'III', 'IIII'])),
 	checkedOn: nullable(text)
 });

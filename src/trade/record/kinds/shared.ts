@@ -1,9 +1,9 @@
 import { isMetalId, metals, type MetalId } from '../../metal/metals.ts';
 import { massUnits, type MassUnitId } from '../../mass/units.ts';
 import type { Weighing } from '../../mass/weighing.ts';
-import { isCurrencyCode, type CurrencyCode } from '../../price/currency.ts';
+import { isCurrencyCode, minorUnit, type CurrencyCode } from '../../price/currency.ts';
 import type { Money } from '../../price/money.ts';
-import { checked, decimalText, list, nullable, object, oneOf, text, type Shape } from '../shape.ts';
+import { checked, decimalText, list, nullable, object, oneOf, positiveText, refined, text, type Shape } from '../shape.ts';
 
 /** Shapes that several kinds of record share. */
 export const metal: Shape<MetalId> = checked('a metal', (found): found is MetalId => isMetalId(found) && Object.hasOwn(metals, found));
@@ -12,13 +12,16 @@ export const massUnit: Shape<MassUnitId> = oneOf(Object.keys(massUnits) as MassU
 
 export const currency: Shape<CurrencyCode> = checked('a currency', (found): found is CurrencyCode => isCurrencyCode(found));
 
-export const money: Shape<Money> = object<Money>({ amount: decimalText, currency });
+/** Not less than nothing, and a whole number of the currency's smallest unit. */
+export const money: Shape<Money> = refined(object<Money>({ amount: decimalText, currency }), ({ amount, currency: of }) =>
+	amount.gte(0) && amount.div(minorUnit(of)).isInteger() ? null : 'an amount that can be paid'
+);
 
 export const weighing: Shape<Weighing> = object<Weighing>({
 	typed: text,
 	reading: decimalText,
 	unit: massUnit,
-	division: nullable(decimalText),
+	division: nullable(positiveText),
 	scale: nullable(text),
 	repeats: list(decimalText),
 	tare: nullable(decimalText)
