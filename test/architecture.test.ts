@@ -49,22 +49,45 @@ const ALIASES: Readonly<Record<string, string>> = { $trade: 'src/trade', $storag
 /** Types that SvelteKit writes beside each route. */
 const GENERATED = /(^|\/)\$types(\.js)?$/;
 
-type Import = { readonly from: string; readonly line: number; readonly name: string };
+type Import = {
+	readonly from: string;
+	readonly line: number;
+	readonly name: string;
+	/** Only for its types: gone when the code runs. The direction holds for it too, but it makes no ring. */
+	readonly erased: boolean;
+};
 
 function importsOf(source: Source): Import[] {
 	const script = scriptOf(source);
+	const erased = erasedPositions(script);
 	const found = ts.preProcessFile(script, true, true).importedFiles.map(({ fileName, pos }) => ({
 		from: source.path,
 		line: lineAt(script, pos),
-		name: fileName
+		name: fileName,
+		erased: erased.some(([from, to]) => pos >= from && pos < to)
 	}));
 	if (!source.path.endsWith('.svelte')) return found;
 	// a page may also import inside its markup: {#await import('...')}
 	for (const match of source.text.matchAll(/\bimport\(\s*['"]([^'"]+)['"]\s*\)/g)) {
 		const line = lineAt(source.text, match.index);
 		const name = match[1]!;
-		if (!found.some((known) => known.name === name)) found.push({ from: source.path, line, name });
+		if (!found.some((known) => known.name === name)) found.push({ from: source.path, line, name, erased: false });
 	}
+	return found;
+}
+
+/** Where `import type`, `export type` and `import('...')` as a type stand. */
+function erasedPositions(script: string): [number, number][] {
+	const found: [number, number][] = [];
+	const visit = (node: ts.Node) => {
+		const gone =
+			(ts.isImportDeclaration(node) && node.importClause?.phaseModifier === ts.SyntaxKind.TypeKeyword) ||
+			(ts.isExportDeclaration(node) && node.isTypeOnly) ||
+			ts.isImportTypeNode(node);
+		if (gone) found.push([node.getStart(), node.end]);
+		else ts.forEachChild(node, visit);
+	};
+	visit(ts.createSourceFile('script.ts', script, ts.ScriptTarget.Latest, true));
 	return found;
 }
 
@@ -110,7 +133,7 @@ function breaches(sources: readonly Source[]): string[] {
 				known.has(path)
 			);
 			if (file === undefined) said.push(`${one.from}:${one.line} imports ${one.name}, which is not there.`);
-			else to.push(file);
+			else if (!one.erased) to.push(file);
 		}
 		graph.set(source.path, to);
 	}
@@ -265,7 +288,7 @@ describe('planted breaches', () => {
 			'a ring',
 			[
 				file('src/ui/a.ts', "import './b.ts';"),
-				file('src/ui/b.ts', "import type { C } from './c.ts';"),
+				file('src/ui/b.ts', "import { type C } from './c.ts';"),
 				file('src/ui/c.ts', "export { a } from './a.ts';")
 			],
 			'These files import one another in a ring: src/ui/a.ts -> src/ui/b.ts -> src/ui/c.ts -> src/ui/a.ts.'
@@ -274,6 +297,10 @@ describe('planted breaches', () => {
 
 	it.each(cases)('finds %s', (_, sources, sentence) => {
 		expect(breaches(sources)).toEqual([sentence]);
+	});
+
+	it('lets two files take types from one another', () => {
+		expect(breaches([file('src/ui/a.ts', "import { b } from './b.ts';"), file('src/ui/b.ts', "import type { A } from './a.ts';")])).toEqual([]);
 	});
 
 	it('finds nothing in files that keep the rules', () => {
