@@ -1,5 +1,5 @@
 import { assert, type Decimal } from '../number/decimal.ts';
-import { divide, exact, reduce, type Exact } from '../number/exact.ts';
+import { divide, exact, times, type Exact } from '../number/exact.ts';
 import { parseNumber, type DecimalMark, type NumberProblem } from '../number/field.ts';
 import { fail, ok, type Result } from '../number/result.ts';
 import { massUnits, type MassUnitId } from '../mass/units.ts';
@@ -50,8 +50,21 @@ export function withQuote(sheet: PriceSheet, quote: Quote, at: number, source = 
 	return { currency: sheet.currency, quotes, at, source };
 }
 
-/** A quote never changes, so its price per gram is worked out once; changing one price leaves the others' as they are. */
-const PER_GRAM = new WeakMap<Quote, Exact>();
+const GRAMS = new Map<MassUnitId, Exact>();
+
+function gramsIn(unit: MassUnitId): Exact {
+	const kept = GRAMS.get(unit);
+	if (kept !== undefined) return kept;
+	const grams = exact(massUnits[unit].grams);
+	GRAMS.set(unit, grams);
+	return grams;
+}
+
+/**
+ * A quote never changes, so the price per gram of each metal's last quote is kept; changing one price leaves the others' as they
+ * are. One entry a metal: a weak map of all quotes costs more than the division it saves.
+ */
+const PER_GRAM = new Map<MetalId, { readonly quote: Quote; readonly perGram: Exact }>();
 
 /**
  * What one gram of the fine metal costs.
@@ -60,10 +73,10 @@ const PER_GRAM = new WeakMap<Quote, Exact>();
  * source: arithmetic on the exact units of mass/units.ts; example of Oregon Department of Agriculture: $100/ozt = $3.215/g.
  */
 export function quotePerGram(quote: Quote): Exact {
-	const kept = PER_GRAM.get(quote);
-	if (kept !== undefined) return kept;
-	const perGram = reduce(divide(exact(quote.amount), exact(massUnits[quote.per].grams)));
-	PER_GRAM.set(quote, perGram);
+	const kept = PER_GRAM.get(quote.metal);
+	if (kept !== undefined && Object.is(kept.quote, quote)) return kept.perGram;
+	const perGram = divide(exact(quote.amount), gramsIn(quote.per));
+	PER_GRAM.set(quote.metal, { quote, perGram });
 	return perGram;
 }
 
@@ -85,7 +98,5 @@ export function pricePerGram(sheet: PriceSheet, metal: MetalId): Exact | null {
  * source: arithmetic; example of Oregon Department of Agriculture: $100/ozt = $5/dwt.
  */
 export function priceIn(quote: Quote, per: MassUnitId): Exact {
-	const perGram = quotePerGram(quote);
-	const grams = exact(massUnits[per].grams);
-	return { n: perGram.n * grams.n, d: perGram.d * grams.d };
+	return times(quotePerGram(quote), gramsIn(per));
 }

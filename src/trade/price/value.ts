@@ -22,17 +22,25 @@ export type Value = {
 /** A sheet made ready: each price is a whole number over one denominator that all share, so that a value needs no common divisor. */
 type PriceTable = { readonly numerators: ReadonlyMap<MetalId, bigint>; readonly denominator: bigint };
 
-const TABLES = new WeakMap<PriceSheet, PriceTable>();
+/** The table of the sheet used last: a sheet never changes, and a screen values everything at one. */
+let last: { readonly sheet: PriceSheet; readonly table: PriceTable } | null = null;
 
 function tableOf(sheet: PriceSheet): PriceTable {
-	const kept = TABLES.get(sheet);
-	if (kept !== undefined) return kept;
-	const prices = sheet.quotes.map((quote) => ({ metal: quote.metal, perGram: quotePerGram(quote) }));
-	// adding zeros over each denominator leaves their least common one
-	const denominator = prices.reduce<Exact>((all, { perGram }) => plus(all, { n: 0n, d: perGram.d }), EXACT_ZERO).d;
-	const numerators = new Map(prices.map(({ metal, perGram }) => [metal, perGram.n * (denominator / perGram.d)] as const));
+	if (last !== null && Object.is(last.sheet, sheet)) return last.table;
+	// adding zero over a denominator leaves the least common one
+	let common: Exact = EXACT_ZERO;
+	for (const quote of sheet.quotes) {
+		const { d } = quotePerGram(quote);
+		if (d !== common.d) common = plus(common, { n: 0n, d });
+	}
+	const denominator = common.d;
+	const numerators = new Map<MetalId, bigint>();
+	for (const quote of sheet.quotes) {
+		const { n, d } = quotePerGram(quote);
+		numerators.set(quote.metal, d === denominator ? n : n * (denominator / d));
+	}
 	const table = { numerators, denominator };
-	TABLES.set(sheet, table);
+	last = { sheet, table };
 	return table;
 }
 

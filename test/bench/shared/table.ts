@@ -36,11 +36,23 @@ export type Act = { readonly name: string; readonly run: (n: number) => number }
 
 const MICROSECONDS = 1_000;
 
-function timed(act: Act, n: number, repeats: number): { each: number; figure: number } {
+/** The last of the repeats has the round's own number, the same for every act, so that the figures can be compared. */
+function timed(act: Act, round: number, repeats: number): { each: number; figure: number } {
 	let figure = 0;
 	const begin = process.hrtime.bigint();
-	for (let i = 0; i < repeats; i += 1) figure = act.run(n * repeats + i);
+	for (let i = repeats - 1; i >= 0; i -= 1) figure = act.run(round + 1_000 * i);
 	return { each: Number(process.hrtime.bigint() - begin) / MICROSECONDS / repeats, figure };
+}
+
+/** Runs an act until the compiler has had its chance (a twentieth of a second, at least once), and says how long one takes. */
+function warm(act: Act): number {
+	let runs = 0;
+	let spent = 0;
+	do {
+		spent += timed(act, runs, 1).each;
+		runs += 1;
+	} while (spent < 50_000);
+	return spent / runs;
 }
 
 function median(values: readonly number[]): number {
@@ -50,18 +62,18 @@ function median(values: readonly number[]): number {
 
 /**
  * Every act in turn, round after round in one process; the median of the rounds in microseconds.
- * Each act is repeated within a round until it fills about a millisecond, so that the clock's own step does not count.
+ * Each act is repeated within a round until it fills about a fiftieth of a second, so that the clock's own step does not count.
  * The figures of one round must agree to a millionth, or the bench stops: a fast wrong answer is not an answer.
  */
 export function interleave(acts: readonly Act[], rounds = 9): Map<string, number> {
-	const repeats = acts.map((act) => {
-		timed(act, 0, 3);
-		return Math.max(1, Math.min(2_000, Math.round(1_000 / Math.max(0.5, timed(act, 1, 1).each))));
-	});
+	const repeats = acts.map((act) => Math.max(1, Math.min(5_000, Math.round(20_000 / warm(act)))));
 	const times = acts.map((): number[] => []);
 	for (let round = 0; round < rounds; round += 1) {
-		acts.forEach((act, i) => times[i]!.push(timed(act, round + 2, repeats[i]!).each));
-		const figures = acts.map((act) => act.run(1_000_000 + round));
+		const figures = acts.map((act, i) => {
+			const { each, figure } = timed(act, round, repeats[i]!);
+			times[i]!.push(each);
+			return figure;
+		});
 		for (const figure of figures) {
 			if (!(Math.abs(figure - figures[0]!) <= 1e-6 * Math.abs(figures[0]!))) throw new Error(`the answers differ: ${figures.join(', ')}`);
 		}
