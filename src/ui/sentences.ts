@@ -99,7 +99,6 @@ export function sentence(problem: Problem, format: Format = formatFor('en')): st
 		case 'line-mass-missing':
 		case 'line-mark-missing':
 		case 'line-two-masses':
-		case 'line-two-marks':
 		case 'line-two-counts':
 		case 'line-times-unclear':
 		case 'line-each':

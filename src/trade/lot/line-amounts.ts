@@ -3,7 +3,7 @@ import { parseNumber, type DecimalMark } from '../number/field.ts';
 import { fail, ok, type Result } from '../number/result.ts';
 import { parseUnit, type MassUnitId } from '../mass/units.ts';
 import type { DeductionKind } from '../piece/deduction.ts';
-import type { LineProblem } from './line.ts';
+import type { LineProblem } from './line-problem.ts';
 import type { Token } from './line-tokens.ts';
 
 /** A number with the unit that stands after it, and what it is about if it is taken off. */

@@ -1,7 +1,7 @@
 import { fail, ok, type Result } from '../number/result.ts';
 import { isTimes, type Amount } from './line-amounts.ts';
 import { isStamp } from './line-mark.ts';
-import type { LineProblem } from './line.ts';
+import type { LineProblem } from './line-problem.ts';
 import type { Token } from './line-tokens.ts';
 
 /** How many pieces an entry is of, as typed. */

@@ -6,7 +6,7 @@ import {
 } from '../metal/mark-words.ts';
 import { metalsOfStamp } from '../metal/stamps.ts';
 import { caratWord, karatOnly } from './line-amounts.ts';
-import type { LineProblem } from './line.ts';
+import type { LineProblem } from './line-problem.ts';
 import type { Token } from './line-tokens.ts';
 
 /** A mark and the tokens it was read from. */

@@ -14,7 +14,7 @@ import { checkPiece, type Content, type Piece } from '../piece/piece.ts';
 import { endingFraction, readNumber, type Amount } from './line-amounts.ts';
 import type { Count } from './line-count.ts';
 import { splitLine } from './line-tokens.ts';
-import type { LineOptions, LineProblem, Place } from './line.ts';
+import type { LineOptions, LineProblem, Place } from './line-problem.ts';
 
 /** Everything that was found in a line, before it is a piece. */
 export type Findings = {

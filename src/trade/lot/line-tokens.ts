@@ -20,8 +20,17 @@ const ORIGINS: readonly (readonly [RegExp, Origin])[] = [
 	[/\buncontrolled\b/i, 'uncontrolled']
 ];
 
-const PART =
-	/(\d{1,3}\/\d{1,4}(?![\d.,/]))|([.,]*\d(?:[\d.,'\u2019]*\d)?)|([%\u2030])|([-\u2212\u2013\u2014])(?=\s*[.,]?\d)|((?:[\p{L}\p{M}\p{So}\u200d\ufe0f]|[*\u00d7])+)|(\p{N})/gu;
+const PART = new RegExp(
+	[
+		String.raw`(\d{1,3}\/\d{1,4}(?![\d.,/]))`,
+		String.raw`([.,]*\d(?:[\d.,'\u2019]*\d)?)`,
+		String.raw`([%\u2030])`,
+		String.raw`([-\u2212\u2013\u2014])(?=\s*[.,]?\d)`,
+		String.raw`((?:[\p{L}\p{M}\p{So}\u200d\ufe0f]|[*\u00d7])+)`,
+		String.raw`(\p{N})`
+	].join('|'),
+	'gu'
+);
 
 /**
  * Splits a line into numbers, fractions, signs and words. What stands after "#" is the note; words of origin are taken out.

@@ -10,7 +10,7 @@ import { checkPiece, type Content, type Piece } from '../piece/piece.ts';
 import { stoneCuts, type StoneCut } from '../piece/stones.ts';
 import { unguard, writeCell } from './csv.ts';
 import { WRITTEN, type ColumnId } from './table-columns.ts';
-import type { RowProblem } from './table.ts';
+import type { RowProblem } from './row-problem.ts';
 
 /**
  * Pieces as a table with everything that is known of them, so that reading it gives the same pieces.

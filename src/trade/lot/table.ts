@@ -1,29 +1,24 @@
 import { decimal } from '../number/decimal.ts';
-import { parseNumber, type DecimalMark, type NumberProblem } from '../number/field.ts';
+import { parseNumber, type DecimalMark } from '../number/field.ts';
 import { fail, ok, type Result } from '../number/result.ts';
-import { parseUnit, toMass, type MassUnitId, type UnitProblem } from '../mass/units.ts';
+import { parseUnit, toMass, type MassUnitId } from '../mass/units.ts';
 import { findCoin } from '../metal/coins.ts';
-import { parseMark, type Mark, type MarkProblem } from '../metal/mark.ts';
+import { parseMark, type Mark } from '../metal/mark.ts';
 import { isOrigin } from '../piece/class.ts';
 import { statedDeduction } from '../piece/deduction.ts';
 import { checkPiece, type Piece } from '../piece/piece.ts';
-import { guessDelimiter, splitRows, unguard, type Delimiter, type QuoteProblem, type Row } from './csv.ts';
+import { guessDelimiter, splitRows, unguard, type Delimiter, type Row } from './csv.ts';
 import { readAmounts } from './line-amounts.ts';
 import { readLineMark } from './line-mark.ts';
 import { makePiece } from './line-piece.ts';
 import { splitLine } from './line-tokens.ts';
-import { parseLine, type LineOptions, type LineProblem } from './line.ts';
+import type { LineOptions } from './line-problem.ts';
+import { parseLine } from './line.ts';
+import type { CellProblem, RowProblem } from './row-problem.ts';
 import { isWritten, readHeadings, UNNAMED, type Column, type ColumnId } from './table-columns.ts';
 import { readWritten } from './table-written.ts';
 
-export type RowProblem =
-	| LineProblem
-	| QuoteProblem
-	| { readonly kind: 'table-cell'; readonly column: string; readonly found: string; readonly problem: NumberProblem | UnitProblem | MarkProblem }
-	| { readonly kind: 'table-cell-unknown'; readonly column: string; readonly found: string }
-	| { readonly kind: 'table-cell-missing'; readonly column: string }
-	/** More cells than headings: most often a decimal comma that was not quoted. */
-	| { readonly kind: 'table-too-many-cells'; readonly cells: number; readonly columns: number };
+export type { CellProblem, RowProblem } from './row-problem.ts';
 
 export type TakenRow = { readonly row: number; readonly piece: Piece };
 /** A row that was not understood, as it stood, so that it can be mended. */
@@ -105,7 +100,7 @@ function readCells(
 	if (used > columns.length) return fail({ kind: 'table-too-many-cells', cells: used, columns: columns.length });
 	const place = (id: ColumnId) => columns.findIndex((column) => column?.id === id);
 	const cell = (id: ColumnId) => unguard((cells[place(id)] ?? '').trim());
-	const problem = (column: ColumnId, of: NumberProblem | UnitProblem | MarkProblem) =>
+	const problem = (column: ColumnId, of: CellProblem) =>
 		fail<RowProblem>({ kind: 'table-cell', column, found: cell(column).slice(0, 60), problem: of });
 	const rules = options.mark === undefined ? {} : { mark: options.mark };
 	// the count
@@ -132,7 +127,8 @@ function readCells(
 	const marked = readMarkCell(cell('mark'), columns[place('mark')]?.karats ?? false, article);
 	if (!marked.ok) return marked;
 	const coin = marked.value === null ? findCoin(cell('mark') === '' ? article : cell('mark')) : null;
-	const amounts = figure.trim() === '' ? [] : [{ start: 0, end: 0, typed: figure.trim(), unit: unit.value, off: false, what: null, from: 0, to: 0 }];
+	const nowhere = { start: 0, end: 0, from: 0, to: 0 };
+	const amounts = figure.trim() === '' ? [] : [{ ...nowhere, typed: figure.trim(), unit: unit.value, off: false, what: null }];
 	if (amounts.length === 0 && coin?.ok !== true) return fail({ kind: 'table-cell-missing', column: 'mass' });
 	if (marked.value === null && coin?.ok !== true) return fail({ kind: 'table-cell-missing', column: 'mark' });
 	const origin = cell('origin').toLowerCase();
@@ -141,7 +137,7 @@ function readCells(
 		line: '',
 		article: article === '' && coin?.ok === true ? cell('mark') : article,
 		amounts,
-		counts: [{ start: 0, end: 0, typed: count.value.toFixed(), from: 0, to: 0 }],
+		counts: [{ ...nowhere, typed: count.value.toFixed() }],
 		unsure: null,
 		mark: marked.value,
 		coin: coin?.ok === true ? { coin: coin.value, place: { start: 0, end: 0, found: coin.value.name } } : null,

@@ -26,7 +26,10 @@ const ARTICLES: readonly (readonly [article: string, words: readonly string[]])[
 	['coin', ['coin', 'sovereign', 'dollar', 'franc', 'krone', 'ducat', 'medal']],
 	['watch', ['watch', 'watchcase', 'case']],
 	['flatware', ['flatware', 'fork', 'spoon', 'knife', 'knives', 'teaspoon', 'tablespoon', 'ladle', 'server', 'tong']],
-	['hollowware', ['hollowware', 'holloware', 'candlestick', 'candelabrum', 'candelabra', 'bowl', 'tray', 'teapot', 'cup', 'goblet', 'vase', 'jug', 'salt']],
+	[
+		'hollowware',
+		['hollowware', 'holloware', 'candlestick', 'candelabrum', 'candelabra', 'bowl', 'tray', 'teapot', 'cup', 'goblet', 'vase', 'jug', 'salt']
+	],
 	['ring', ['ring', 'band', 'signet']],
 	['chain', ['chain', 'necklace', 'rope', 'curb']],
 	['bracelet', ['bracelet', 'bangle', 'anklet', 'cuff']],

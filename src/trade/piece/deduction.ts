@@ -1,6 +1,7 @@
 import { decimal, ZERO, type Decimal } from '../number/decimal.ts';
+import { ok, type Result } from '../number/result.ts';
 import type { Mass } from '../mass/mass.ts';
-import type { StoneSize } from './stones.ts';
+import { caratsBySize, type StoneProblem, type StoneSize } from './stones.ts';
 
 /** What is in or on a piece and is not its metal. */
 export type DeductionKind = 'stones' | 'springs' | 'pins' | 'movement' | 'crystal' | 'filler' | 'enamel' | 'dirt' | 'other';
@@ -43,6 +44,21 @@ export const DEFAULT_RELATIVE_U = 0.1;
  */
 export function statedDeduction(what: DeductionKind, mass: Mass, how: string): Deduction {
 	return { what, mass, u: mass.grams.toNumber() * DEFAULT_RELATIVE_U, how };
+}
+
+const CARAT = decimal('0.2');
+
+/**
+ * The deduction for measured stones.
+ * formula: carats by size x 0.2 g; standard uncertainty 10 %.
+ * rounding: the carats, half-even to 0.001 ct.
+ * source: printed gemmology formulas; the carat of 0.2 g: 4th CGPM (1907), from memory.
+ */
+export function stoneDeduction(size: StoneSize, how: string): Result<Deduction, StoneProblem> {
+	const carats = caratsBySize(size);
+	if (!carats.ok) return carats;
+	const mass: Mass = { grams: carats.value.times(CARAT) };
+	return ok({ what: 'stones', mass, u: mass.grams.toNumber() * DEFAULT_RELATIVE_U, how, stones: size });
 }
 
 const FILLER_SHARE = decimal('0.9');

@@ -1,9 +1,7 @@
 import { decimal, type Decimal } from '../number/decimal.ts';
 import { fail, ok, type Result } from '../number/result.ts';
 import { round } from '../number/rounding.ts';
-import type { Mass } from '../mass/mass.ts';
 import { propagate, type Uncertain } from '../uncertainty/uncertain.ts';
-import { DEFAULT_RELATIVE_U, type Deduction } from './deduction.ts';
 
 export type StoneCut = 'round' | 'round-diamond' | 'oval' | 'emerald-cut' | 'pear' | 'heart' | 'cabochon';
 
@@ -43,7 +41,6 @@ export const stoneCuts = Object.keys(factors) as readonly StoneCut[];
 const LARGEST = decimal('100');
 const LEAST_GRAVITY = decimal('1');
 const MOST_GRAVITY = decimal('7.5');
-const CARAT = decimal('0.2');
 const STEP = decimal('0.001');
 
 /**
@@ -68,19 +65,6 @@ export function caratsBySize(size: StoneSize): Result<Decimal, StoneProblem> {
 	const area = cut === 'round' || diamond || cut === 'oval' ? mean.times(mean) : length.times(width);
 	const one = area.times(depth).times(factors[cut]).times(diamond ? 1 : gravity);
 	return ok(round(one.times(count), STEP, 'half-even'));
-}
-
-/**
- * The deduction for measured stones.
- * formula: carats by size x 0.2 g; standard uncertainty 10 %.
- * rounding: the carats, half-even to 0.001 ct.
- * source: printed gemmology formulas; the carat of 0.2 g: 4th CGPM (1907), from memory.
- */
-export function stoneDeduction(size: StoneSize, how: string): Result<Deduction, StoneProblem> {
-	const carats = caratsBySize(size);
-	if (!carats.ok) return carats;
-	const mass: Mass = { grams: carats.value.times(CARAT) };
-	return ok({ what: 'stones', mass, u: mass.grams.toNumber() * DEFAULT_RELATIVE_U, how, stones: size });
 }
 
 /**

@@ -40,8 +40,6 @@ export function lotSentence(problem: LotProblem, format: Format): string {
 				: `“${problem.words}” has no mark. Write it first, such as 14k, 585, 925 or brass.`;
 		case 'line-two-masses':
 			return two('masses', problem.first.found, problem.second.found, 'The mass is that of all pieces together.');
-		case 'line-two-marks':
-			return two('marks', problem.first.found, problem.second.found, 'Put each part on a line of its own.');
 		case 'line-two-counts':
 			return two('counts', problem.first.found, problem.second.found, 'Keep one.');
 		case 'line-times-unclear':

@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { decimal } from '../../../src/trade/number/decimal.ts';
 import { certain, uncertain } from '../../../src/trade/uncertainty/uncertain.ts';
-import { caratsBySize, stoneCuts, stoneDeduction, stonesByWater, type StoneCut, type StoneSize } from '../../../src/trade/piece/stones.ts';
+import { stoneDeduction } from '../../../src/trade/piece/deduction.ts';
+import { caratsBySize, stoneCuts, stonesByWater, type StoneCut, type StoneSize } from '../../../src/trade/piece/stones.ts';
 
 const size = (cut: StoneCut, [length, width, depth]: readonly [string, string, string], gravity: string, count = 1): StoneSize => ({
 	cut, count, length: decimal(length), width: decimal(width), depth: decimal(depth), gravity: decimal(gravity)
