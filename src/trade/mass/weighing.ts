@@ -168,7 +168,8 @@ export type SameLoadProblem = {
 	readonly allowed: number;
 };
 
-const TIMES_ALLOWED = 3;
+/** Standard uncertainties of a difference that two weighings of one load may lie apart. */
+export const TIMES_ALLOWED = 3;
 
 /**
  * What it is: whether two weighings can be of the same load (weigh twice: at the test and at the payment).
