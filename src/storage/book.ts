@@ -64,7 +64,7 @@ async function ownRow(session: Session): Promise<BookRow> {
 		revision: 0,
 		lastBackup: null
 	});
-	const known = await session.use((db) => db.table<BookRow, string>('book').get('book'));
+	const known = await session.use((db) => db.book.get('book'));
 	if (known !== undefined || session.readOnly !== null) return known ?? fresh();
 	return session.alone(() =>
 		session.use((db) =>

@@ -62,15 +62,6 @@ export type OnlyHereRow = { readonly subject: string };
 export type DamagedRow = { readonly key: string; readonly reason: string; readonly row: Json };
 
 export class BookDatabase extends Dexie {
-	declare readonly records: Table<StoredRecord, string>;
-	declare readonly current: Table<CurrentRow, string>;
-	declare readonly sums: Table<SumsRow, string>;
-	declare readonly photos: Table<PhotoRow, string>;
-	declare readonly drafts: Table<DraftRow, string>;
-	declare readonly book: Table<BookRow, string>;
-	declare readonly onlyHere: Table<OnlyHereRow, string>;
-	declare readonly damaged: Table<DamagedRow, string>;
-
 	/** `asFound`: with whatever tables a newer app has made, for reading only. */
 	constructor(name: string, { indexedDB, IDBKeyRange }: Environment, asFound = false) {
 		super(name, {
@@ -105,5 +96,31 @@ export class BookDatabase extends Dexie {
 			onlyHere: 'subject',
 			damaged: 'key'
 		});
+	}
+
+	// looked up by name: so they are there also when the tables are taken as found
+	get records(): Table<StoredRecord, string> {
+		return this.table('records');
+	}
+	get current(): Table<CurrentRow, string> {
+		return this.table('current');
+	}
+	get sums(): Table<SumsRow, string> {
+		return this.table('sums');
+	}
+	get photos(): Table<PhotoRow, string> {
+		return this.table('photos');
+	}
+	get drafts(): Table<DraftRow, string> {
+		return this.table('drafts');
+	}
+	get book(): Table<BookRow, string> {
+		return this.table('book');
+	}
+	get onlyHere(): Table<OnlyHereRow, string> {
+		return this.table('onlyHere');
+	}
+	get damaged(): Table<DamagedRow, string> {
+		return this.table('damaged');
 	}
 }
