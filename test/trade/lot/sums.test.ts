@@ -9,7 +9,7 @@ import { standardUncertainty, sumUncertain, type Uncertain } from '../../../src/
 import {
 	addPiece, addPieces, combinedUncertainty, emptySums, estimateOf, fineInterval, removePiece, type LotSums
 } from '../../../src/trade/lot/sums.ts';
-import { decodeSums, encodeSums } from '../../../src/trade/lot/sums-stored.ts';
+import { encodeSums } from '../../../src/trade/lot/sums-stored.ts';
 import { estimate, fineOf, netOf, type Piece } from '../../../src/trade/piece/piece.ts';
 import { anyPiece, pieceOf } from '../piece/some-pieces.ts';
 

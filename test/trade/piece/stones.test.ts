@@ -27,7 +27,9 @@ describe('stones by their size', () => {
 
 	it.each([
 		[size('round', ['0', '6', '4'], '4'), 'stone-size-not-positive'], [size('round', ['6', '6', '400'], '4'), 'stone-size-too-large'],
-		[size('round', ['6', '6', '4'], '19.3'), 'stone-gravity-unlikely'], [size('round', ['6', '6', '4'], '4', 0), 'stone-count-not-whole'], [size('round', ['6', '6', '4'], '4', 1.5), 'stone-count-not-whole']
+		[size('round', ['6', '6', '4'], '19.3'), 'stone-gravity-unlikely'],
+		[size('round', ['6', '6', '4'], '4', 0), 'stone-count-not-whole'],
+		[size('round', ['6', '6', '4'], '4', 1.5), 'stone-count-not-whole']
 	])('%#: refused', (of, kind) => expect(carats(of)).toBe(kind));
 
 	it('is a deduction in grams with ten percent', () => {
@@ -54,7 +56,10 @@ describe('stones by water', () => {
 		for (const [source, slope] of Object.entries(slopes)) expect(result.value.contributions[source]).toBeCloseTo(slope, 5);
 	});
 
-	it.each([[0.1, 5, 13, 3.5, 'stone-water-impossible'], [9, 5, 13, 3.5, 'stone-water-impossible'], [0.5, 5, 3.6, 3.5, 'stone-density-like-metal'], [0.5, 5, 13, 0, 'stone-density-like-metal']] as const)(
+	it.each([
+		[0.1, 5, 13, 3.5, 'stone-water-impossible'], [9, 5, 13, 3.5, 'stone-water-impossible'], [0.5, 5, 3.6, 3.5, 'stone-density-like-metal'],
+		[0.5, 5, 13, 0, 'stone-density-like-metal']
+	] as const)(
 		'volume %f, mass %f, densities %f and %f: %s',
 		(v, m, metal, stone, kind) => {
 			const result = stonesByWater(certain(v), certain(m), certain(metal), certain(stone));
