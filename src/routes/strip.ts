@@ -1,5 +1,5 @@
 import { ageOf } from '$trade/price/age.ts';
-import { metals } from '$trade/metal/metals.ts';
+import { metalName } from '$ui/metal-name.ts';
 import type { Shop } from './shop.svelte.ts';
 
 /** From this age in days on a price is called old. */
@@ -13,7 +13,7 @@ export function stripQuotes({ sheet, now, format }: Shop) {
 	const old = ageOf(sheet.body, now) > OLD_DAYS;
 	return quotes.map(({ metal, amount, per }) => ({
 		metal,
-		name: metals[metal].name,
+		name: metalName(metal),
 		amount: format.price(amount, currency),
 		per: format.per(per),
 		age,

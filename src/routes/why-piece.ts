@@ -1,4 +1,4 @@
-import { metals, type MetalId } from '$trade/metal/metals.ts';
+import type { MetalId } from '$trade/metal/metals.ts';
 import { toNumber, exact, times } from '$trade/number/exact.ts';
 import { shareOf } from '$trade/metal/fineness.ts';
 import { massOf } from '$trade/mass/weighing.ts';
@@ -6,9 +6,10 @@ import { estimate, netOf, type Piece } from '$trade/piece/piece.ts';
 import { budget } from '$trade/uncertainty/budget.ts';
 import { interval } from '$trade/uncertainty/coverage.ts';
 import type { Uncertain } from '$trade/uncertainty/uncertain.ts';
+import { metalName } from '$ui/metal-name.ts';
 import { pieceFine } from '$ui/piece-words.ts';
 import type { Shop } from './shop.svelte.ts';
-import { COVERAGE, sourceWords, type Why } from './why.ts';
+import { COVERAGE, inWords, sourceWords, type Why } from './why.ts';
 
 /** Why the fine metal of a piece is what it is. */
 export function whyPiece(shop: Shop, piece: Piece, key: string): Why {
@@ -34,13 +35,13 @@ export function whyPiece(shop: Shop, piece: Piece, key: string): Why {
 			...piece.deductions.map(({ what, mass, how }) => ({ name: `less ${what}`, value: `− ${format.mass(mass.grams)}`, how })),
 			{ name: 'Net', value: format.mass(net) },
 			...piece.contents.map(({ metal, taken }: { metal: MetalId; taken: Piece['contents'][number]['taken'] }) => ({
-				name: metals[metal].name,
+				name: metalName(metal),
 				value: format.fine(metal, times(exact(net), shareOf(taken)), 4),
 				how: `net × ${format.fineness(taken, { least: 0, most: 3 })}`
 			}))
 		],
 		formula: 'Net grams × the fineness taken ÷ 1000, for each metal. Kept as an exact fraction until it is printed.',
-		budget: budget(main).map(({ source, u, share }) => ({ source: words(source), u: `${format.estimate(Math.abs(u))}\u00a0g`, share })),
+		budget: inWords(budget(main), words).map(({ source, u, share }) => ({ source, u: `${format.estimate(u)}\u00a0g`, share })),
 		source: 'Common practice for the formula. Reading: JCGM 100:2008 (GUM) 4.3.7; how far classes run from their marks: working defaults, no source, yours to change.',
 		note: `${toNumber(exact(net)) < 5 ? 'On so small a piece the last digit of the scale matters. ' : ''}The mark is taken as true within its class: an honest interval for a filled piece needs a test. An estimate is not an assay.`
 	};

@@ -6,9 +6,10 @@ import { toNumber, type Exact } from '$trade/number/exact.ts';
 import { volatilityOf, widen, ageOf } from '$trade/price/age.ts';
 import { printedValue, uncertainValue, type Value } from '$trade/price/value.ts';
 import type { Offer } from '$trade/price/offer.ts';
-import { budget } from '$trade/uncertainty/budget.ts';
+import { budget, type BudgetRow } from '$trade/uncertainty/budget.ts';
 import { interval } from '$trade/uncertainty/coverage.ts';
 import type { Uncertain } from '$trade/uncertainty/uncertain.ts';
+import { metalName } from '$ui/metal-name.ts';
 import type { Shop } from './shop.svelte.ts';
 
 /** What the "why?" sheet shows of one figure. */
@@ -52,11 +53,22 @@ export function sourceWords(source: string, shop: Shop): string {
 }
 
 function shares(of: Uncertain, unit: string, shop: Shop): Why['budget'] {
-	return budget(of).map(({ source, u, share }) => ({
-		source: sourceWords(source, shop),
-		u: `${shop.format.estimate(Math.abs(u))}${unit === '' ? '' : `\u00a0${unit}`}`,
+	return inWords(budget(of), (source) => sourceWords(source, shop)).map(({ source, u, share }) => ({
+		source,
+		u: `${shop.format.estimate(u)}${unit === '' ? '' : `\u00a0${unit}`}`,
 		share
 	}));
+}
+
+/** A budget under the words of its sources; sources that have the same words, each independent, as one row. */
+export function inWords(rows: readonly BudgetRow[], words: (source: string) => string): BudgetRow[] {
+	const all = new Map<string, BudgetRow>();
+	for (const { source, u, share } of rows) {
+		const said = words(source);
+		const known = all.get(said);
+		all.set(said, { source: said, u: Math.hypot(u, known?.u ?? 0), share: share + (known?.share ?? 0) });
+	}
+	return [...all.values()].sort((a, b) => b.share - a.share);
 }
 
 const range = ({ low, high }: { low: number; high: number }, unit: string, shop: Shop, places = 2): string =>
@@ -75,7 +87,7 @@ export function whyValue(shop: Shop, sums: LotSums, value: Value): Why | null {
 		const quote = sheet.body.quotes.find((each) => each.metal === metal);
 		const part = printed.byMetal[metal];
 		return {
-			name: metals[metal].name,
+			name: metalName(metal),
 			value: part === undefined ? 'no price: counts nothing' : format.money({ amount: part, currency }),
 			how: quote === undefined ? format.fine(metal, grams, 4) : `${format.fine(metal, grams, 4)} × ${format.price(quote.amount, currency)} ${format.per(quote.per)}`
 		};

@@ -15,6 +15,9 @@ const DAY = 86_400_000;
 /** How many places to print: exactly so many, or at least and at most. */
 export type Places = number | { readonly least: number; readonly most: number };
 
+/** Sums of masses in grams: two places, a third where a scale shows one. What was typed keeps its own digits. */
+export const GRAMS_SHOWN: Places = { least: 2, most: 3 };
+
 /**
  * The only way from a decimal or a fraction to text that a person reads, in the language of numbers that the buyer chose.
  * What is exact goes to `Intl` as a text and never passes through a float; a fraction is rounded once, here, half-even,

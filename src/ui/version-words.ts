@@ -20,6 +20,22 @@ export function kindName(kind: string): string {
 	return Object.hasOwn(KINDS, kind) ? KINDS[kind as RecordKind] : kind;
 }
 
+/** What something is called, without what may be in question. */
+export function thingName(of: KindBody): string {
+	switch (of.kind) {
+		case 'lot':
+		case 'scale':
+			return of.body.name;
+		case 'piece':
+			return pieceName(of.body.piece);
+		case 'purchase':
+			return of.body.number ?? '';
+		case 'prices':
+		case 'settings':
+			return '';
+	}
+}
+
 /** What one version of something says, in a line. */
 export function versionWords(of: KindBody, format: Format): string {
 	switch (of.kind) {
