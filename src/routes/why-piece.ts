@@ -42,7 +42,9 @@ export function whyPiece(shop: Shop, piece: Piece, key: string): Why {
 		],
 		formula: 'Net grams × the fineness taken ÷ 1000, for each metal. Kept as an exact fraction until it is printed.',
 		budget: inWords(budget(main), words).map(({ source, u, share }) => ({ source, u: `${format.estimate(u)}\u00a0g`, share })),
-		source: 'Common practice for the formula. Reading: JCGM 100:2008 (GUM) 4.3.7; how far classes run from their marks: working defaults, no source, yours to change.',
+		source:
+			'Common practice for the formula. Reading: JCGM 100:2008 (GUM) 4.3.7; how far classes run from their marks: working defaults, ' +
+			'no source, yours to change.',
 		note: `${toNumber(exact(net)) < 5 ? 'On so small a piece the last digit of the scale matters. ' : ''}The mark is taken as true within its class: an honest interval for a filled piece needs a test. An estimate is not an assay.`
 	};
 }

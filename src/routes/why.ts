@@ -101,7 +101,9 @@ export function whyValue(shop: Shop, sums: LotSums, value: Value): Why | null {
 		figure: format.money(printed.total),
 		uncertainty: range(interval(doubt, COVERAGE), currency, shop),
 		inputs,
-		formula: 'Sum over metals of fine grams × price per gram. Fine grams are net mass × the fineness taken ÷ 1000, kept as exact fractions; the sum is rounded once, to the minor unit, halves to even.',
+		formula:
+			'Sum over metals of fine grams × price per gram. Fine grams are net mass × the fineness taken ÷ 1000, kept as exact fractions; ' +
+			'the sum is rounded once, to the minor unit, halves to even.',
 		budget: shares(doubt, currency, shop),
 		source: `Arithmetic. Prices: ${sheet.body.source === '' ? 'typed without a source' : sheet.body.source}, ${format.age(sheet.body.at, now)}${moved.length === 0 ? '' : `; since then they may have moved by ${moved.join(', ')}`}. Uncertainty: JCGM 100:2008 (GUM) 5.2.2.`,
 		note: `Before losses in the melt and a refiner’s terms. ${ESTIMATE}`
@@ -160,7 +162,9 @@ export function whyYield(shop: Shop, sums: LotSums): Why | null {
 		],
 		formula: 'Bar = sum over classes of net × (1 − not metal) × (1 − metal lost). Fine metal = kept share × net × (1 − not metal) × fineness.',
 		budget: shares(bar.barMass, 'g', shop),
-		source: 'Conservation of mass; delta method, JCGM 100:2008 (GUM) 5.2.2. Losses by class are working defaults from the trade, no source, yours to change in Book, Settings.',
+		source:
+			'Conservation of mass; delta method, JCGM 100:2008 (GUM) 5.2.2. Losses by class are working defaults from the trade, no source, ' +
+			'yours to change in Book, Settings.',
 		note: `${toNumber(bar.net) < 5 ? 'So little metal is hard to melt without larger losses. ' : ''}${ESTIMATE}`
 	};
 }
