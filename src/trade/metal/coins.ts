@@ -17,6 +17,10 @@ for (const coin of coins) {
 	}
 }
 
+/** Every word that stands in the name of a coin: most texts hold none of them, and need no closer look. */
+const words: ReadonlySet<string> = new Set([...byName.keys()].flatMap((name) => name.split(' ')));
+const mayNameCoin = (text: string): boolean => text.split(' ').some((word) => words.has(word) || (word.endsWith('s') && words.has(word.slice(0, -1))));
+
 /** The coin of an id that was stored; null when it is none of ours. */
 export function coinById(id: string): Coin | null {
 	return coins.find((coin) => coin.id === id) ?? null;
@@ -26,6 +30,7 @@ export function coinById(id: string): Coin | null {
 export function findCoin(text: string): Result<Coin, CoinProblem> {
 	const shown = text.trim().replace(/\s+/g, ' ').slice(0, 60);
 	const whole = shown.toLowerCase().replaceAll('-', ' ');
+	if (!mayNameCoin(whole)) return fail({ kind: 'coin-unknown', text: shown });
 	const plain = whole
 		.replace(/\b(?:1[5-9]|20)\d\d\b/g, ' ')
 		.replace(/\bcoins?\b/g, ' ')

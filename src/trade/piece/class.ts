@@ -55,8 +55,20 @@ export function articleWords(article: string): string[] {
 	});
 }
 
+/** Articles come again and again: what they were read as is kept, up to so many. */
+const READ = new Map<string, string>();
+const MOST_READ = 500;
+
 /** The article that a class is named after: the first known one in the order of the list above, "other" if none is known. */
 export function articleClass(article: string): string {
+	const known = READ.get(article);
+	if (known !== undefined) return known;
+	const read = readClass(article);
+	if (READ.size < MOST_READ) READ.set(article, read);
+	return read;
+}
+
+function readClass(article: string): string {
 	const words = new Set(articleWords(article).map((word) => BY_WORD.get(word)));
 	return ARTICLES.find(([name]) => words.has(name))?.[0] ?? (findCoin(article).ok ? 'coin' : 'other');
 }
