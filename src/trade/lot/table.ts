@@ -27,7 +27,8 @@ export type Table = { readonly taken: readonly TakenRow[]; readonly refused: rea
 
 /**
  * Pieces from pasted text: typed lines, or a table with commas, semicolons or tabs, with headings or without. Every row is taken
- * or refused with its reason; none is dropped. In a table that shows decimal commas, "1.234" is asked about as well.
+ * or refused with its reason; none is dropped. In a table that shows decimal commas and
+ * no decimal dots, "1.234" is asked about as well.
  * rounding: none.
  * source: RFC 4180, 2, for tables; our own way of writing for lines.
  */
@@ -39,7 +40,8 @@ export function readTable(text: string, options: LineOptions = {}): Table {
 		return readRows(rows, (row) => (written ? readOurs(row, columns.length) : readCells(row.cells, columns, { ...options, mark })));
 	}
 	const delimiter = guessDelimiter(text);
-	const commas = /(?:^|[^\d.,])\d+,\d{1,2}(?![\d.,])/m.test(text) && delimiter !== ',';
+	const dots = /(?:^|[^\d.,])\d+\.\d{1,2}(?![\d.,])/m.test(text);
+	const commas = /(?:^|[^\d.,])\d+,\d{1,2}(?![\d.,])/m.test(text) && delimiter !== ',' && !dots;
 	const mark = options.mark ?? (commas ? 'comma' : undefined);
 	const unnamed = (row: Row) => (isUnnamed(row.cells) ? readCells(row.cells, UNNAMED, { ...options, mark }) : null);
 	const line = (row: Row) => parseLine(row.text, { ...options, mark });
@@ -75,7 +77,9 @@ function findHeadings(text: string): Headed | null {
 
 function showsCommas(rows: readonly Row[], columns: readonly (Column | null)[]): boolean {
 	const at = columns.findIndex((column) => column?.id === 'mass');
-	return rows.some(({ cells }) => /^\s*\d+,\d{1,2}(?!\d)/.test(cells[at] ?? ''));
+	const shows = (decimals: RegExp) => rows.some(({ cells }) => decimals.test(cells[at] ?? ''));
+	// a list kept by two hands shows both: then a dot is what it is for everybody, and only "1,234" is asked about
+	return shows(/^\s*\d+,\d{1,2}(?!\d)/) && !shows(/^\s*\d+\.\d{1,2}(?!\d)/);
 }
 
 function readOurs(row: Row, columns: number): Result<Piece, RowProblem> {

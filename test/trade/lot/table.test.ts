@@ -228,3 +228,19 @@ describe('hostile text', () => {
 		);
 	});
 });
+
+describe('a list kept by two hands', () => {
+	const masses = (text: string) => {
+		const { taken, refused } = readTable(text);
+		return [taken.map(({ piece }) => piece.weighing.reading.toFixed()), refused.map(({ problem }) => problem.kind)];
+	};
+
+	it('asks about "1.234" where only decimal commas are written', () => {
+		expect(masses('mass;unit;mark\n12,34;g;585\n1.234;g;585')).toEqual([['12.34'], ['table-cell']]);
+	});
+
+	it('reads "1.234" as for everybody where decimal dots are written too, and still asks about "1,234"', () => {
+		expect(masses('mass;unit;mark\n12,34;g;585\n5.20;g;585\n1.234;g;585\n1,234;g;585')).toEqual([['12.34', '5.2', '1.234'], ['table-cell']]);
+		expect(masses('585 12,34 g\n585 5.20 g\n585 1.234 g\n585 1,234 g')).toEqual([['12.34', '5.2', '1.234'], ['line-number']]);
+	});
+});
