@@ -7,13 +7,10 @@ import { askedFor } from '$trade/price/asked.ts';
 import { printedValue, valueOf } from '$trade/price/value.ts';
 import type { PurchaseBody } from '$trade/record/kinds/purchase.ts';
 import type { Entry } from '$storage/rows.ts';
-import type { Format } from '$ui/format.ts';
+import { GRAMS_SHOWN, type Format } from '$ui/format.ts';
 import { sentence } from '$ui/sentences.ts';
 
 type Fact = { readonly name: string; readonly value: string; readonly note?: string; readonly strong?: boolean };
-
-/** A total of pieces in other units has more places than anyone reads. */
-const GRAMS = { least: 0, most: 3 } as const;
 
 /** Seller, money and masses of a purchase, as they were. */
 export function moneyFacts(body: PurchaseBody, format: Format): readonly Fact[] {
@@ -27,8 +24,8 @@ export function moneyFacts(body: PurchaseBody, format: Format): readonly Fact[] 
 		{ name: means === '' ? 'Paid' : `Paid, ${means}`, value: format.money(paid), note: ofValue, strong: true },
 		{
 			name: 'Gross mass',
-			value: format.mass(totals.gross, 'g', GRAMS),
-			...(totals.net.equals(totals.gross) ? {} : { note: `${format.mass(totals.net, 'g', GRAMS)} net of what is not metal` })
+			value: format.mass(totals.gross, 'g', GRAMS_SHOWN),
+			...(totals.net.equals(totals.gross) ? {} : { note: `${format.mass(totals.net, 'g', GRAMS_SHOWN)} net of what is not metal` })
 		}
 	];
 }

@@ -14,6 +14,7 @@ import { offerFor, tiers } from '$trade/price/offer.ts';
 import { parseQuote, priceSheet, type PriceSheet } from '$trade/price/price-sheet.ts';
 import { valueOf } from '$trade/price/value.ts';
 import { defaultSettings } from '$trade/record/kinds/settings.ts';
+import { typedNumber } from '$ui/format/typed-text.ts';
 import { demoLots, demoOpenLot, demoScale, demoSheets, demoTiers, demoUnits, type DemoLot } from './demo-scenario.ts';
 
 type Sheet = { readonly subject: string; readonly body: PriceSheet };
@@ -93,7 +94,7 @@ function boughtLot(
 				sheet: sheet.subject,
 				prices: sheet.body,
 				totals: { gross, net, fine, value },
-				second: lot.again ? weighedAgain(round(gross, scale.division, 'half-even').toFixed(2), scale) : null,
+				second: lot.again ? weighedAgain(typedNumber(round(gross, scale.division, 'half-even'), 'dot', 2), scale) : null,
 				entries,
 				pieces: sums.pieces
 			},
