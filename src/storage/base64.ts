@@ -13,7 +13,8 @@ export function fromBase64(text: string): Uint8Array<ArrayBuffer> | null {
 		const binary = atob(text);
 		const bytes = new Uint8Array(binary.length);
 		for (let index = 0; index < binary.length; index += 1) bytes[index] = binary.charCodeAt(index);
-		return bytes;
+		// the last four signs could say the same bytes in more than one way
+		return toBase64(bytes.subarray(bytes.length - (bytes.length % 3))) === (bytes.length % 3 === 0 ? '' : text.slice(-4)) ? bytes : null;
 	} catch {
 		return null;
 	}

@@ -5,7 +5,7 @@ import type { PhotoRow } from './schema.ts';
 /** A picture as it is kept: plain bytes (stored Blobs break on one family of browsers), named by their SHA-256. */
 export type Photo = PhotoRow;
 
-export type PhotoFound = { readonly state: 'whole'; readonly photo: Photo } | { readonly state: 'damaged'; readonly photo: Photo } | { readonly state: 'missing' };
+export type PhotoFound = { readonly state: 'whole' | 'damaged'; readonly photo: Photo } | { readonly state: 'missing' };
 
 export async function makePhoto(bytes: ArrayBuffer, type: string): Promise<Photo> {
 	return { id: await sha256(new Uint8Array(bytes)), type, bytes };

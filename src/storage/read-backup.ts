@@ -69,8 +69,8 @@ async function* linesOf(file: Blob, signal: AbortSignal | undefined): AsyncGener
 	} catch (thrown) {
 		if (thrown instanceof BackupFailure) throw thrown;
 		// the unpacker and the decoder say in their own words that bytes are missing or wrong
-		if (count === 0) throw new BackupFailure({ kind: 'backup-not-ours' });
-		const short = /unexpected end|incomplete|premature|terminated/i.test(String(thrown));
+		if (!zipped && count === 0) throw new BackupFailure({ kind: 'backup-not-ours' });
+		const short = /unexpected end|incomplete|premature|terminated|truncated/i.test(String(thrown));
 		throw new BackupFailure(short ? { kind: 'backup-cut-short', line: count + 1 } : { kind: 'backup-damaged', line: count + 1, what: 'gzip' });
 	} finally {
 		await reader.cancel().catch(() => undefined);

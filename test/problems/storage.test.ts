@@ -11,7 +11,7 @@ afterEach(() => void vi.restoreAllMocks());
 /** The platform refuses every write into a store, the way browsers say it. */
 function refuse(error: Error): void {
 	const put = FakeStore.prototype.put;
-	vi.spyOn(FakeStore.prototype, 'put').mockImplementation(function (this: FakeStore, row: unknown, key?: unknown) {
+	vi.spyOn(FakeStore.prototype, 'put').mockImplementation(function (this: IDBObjectStore, row: unknown, key?: unknown) {
 		if (this.name === 'records') throw error;
 		return put.call(this, row, key as never);
 	});
@@ -46,7 +46,7 @@ describe('problems of saving; each time nothing was saved', () => {
 		const on = device();
 		const real = FakeDatabase.prototype.transaction;
 		let full = false;
-		vi.spyOn(FakeDatabase.prototype, 'transaction').mockImplementation(function (this: FakeDatabase, ...args) {
+		vi.spyOn(FakeDatabase.prototype, 'transaction').mockImplementation(function (this: IDBDatabase, ...args) {
 			const transaction = real.apply(this, args as never);
 			if (full && args[1] === 'readwrite') {
 				const store = transaction.objectStore('book');
@@ -55,7 +55,7 @@ describe('problems of saving; each time nothing was saved', () => {
 					const request = put(row as never);
 					request.addEventListener('success', () => {
 						transaction.abort();
-						transaction.error = new DOMException('full', 'QuotaExceededError') as never;
+						Object.defineProperty(transaction, 'error', { value: new DOMException('full', 'QuotaExceededError') });
 					});
 					return request;
 				});

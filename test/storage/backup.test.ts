@@ -10,7 +10,7 @@ const linesOf = async (blob: Blob) =>
 		.toString('utf8')
 		.trimEnd()
 		.split('\n')
-		.map((line) => JSON.parse(line) as Record<string, never>);
+		.map((line) => JSON.parse(line) as Record<string, unknown>);
 
 async function fullBook() {
 	const on = device();

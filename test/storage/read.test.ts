@@ -78,7 +78,12 @@ describe('reading', () => {
 		const book = await opened();
 		await saved(book, [lotChange('lot-1')]);
 		await saved(book, Array.from({ length: 300 }, (_, n) => pieceChange(`p-${String(n).padStart(3, '0')}`, 'lot-1', '14k ring 1g', n)));
-		const spies = [vi.spyOn(FakeStore.prototype, 'get'), vi.spyOn(FakeStore.prototype, 'getAll'), vi.spyOn(FakeIndex.prototype, 'getAll'), vi.spyOn(FakeIndex.prototype, 'openCursor')];
+		const spies = [
+			vi.spyOn(FakeStore.prototype, 'get'),
+			vi.spyOn(FakeStore.prototype, 'getAll'),
+			vi.spyOn(FakeIndex.prototype, 'getAll'),
+			vi.spyOn(FakeIndex.prototype, 'openCursor')
+		];
 		const keys = await book.lotKeys('lot-1');
 		await book.lot('lot-1');
 		expect(await book.pieces(keys.slice(100, 120))).toHaveLength(20);

@@ -93,7 +93,7 @@ describe('restoring', () => {
 		const before = await contentOf(on);
 		const preview = value(await book.previewBackup(file.blob));
 		const put = FakeStore.prototype.put;
-		const spy = vi.spyOn(FakeStore.prototype, 'put').mockImplementation(function (this: FakeStore, row: unknown, key?: unknown) {
+		const spy = vi.spyOn(FakeStore.prototype, 'put').mockImplementation(function (this: IDBObjectStore, row: unknown, key?: unknown) {
 			if (this.name === 'book') throw new DOMException('no room', 'QuotaExceededError');
 			return put.call(this, row, key as never);
 		});
