@@ -1,17 +1,16 @@
 import type { MetalId } from '$trade/metal/metals.ts';
-import { parseFineness, type Fineness, type FinenessProblem } from '$trade/metal/fineness.ts';
+import { parseFineness, type FinenessProblem } from '$trade/metal/fineness.ts';
 import { parseMark, type MarkProblem } from '$trade/metal/mark.ts';
 import type { MassUnitId } from '$trade/mass/units.ts';
 import { weighing, type WeighingProblem } from '$trade/mass/weighing.ts';
 import type { Scale } from '$trade/mass/scale.ts';
-import { decimal } from '$trade/number/decimal.ts';
-import { compareExact, exact, exactFromText, exactToText, reduce, times, type Exact } from '$trade/number/exact.ts';
+import { exactFromText, exactToText, reduce } from '$trade/number/exact.ts';
 import type { DecimalMark } from '$trade/number/field.ts';
-import { round } from '$trade/number/rounding.ts';
 import type { Origin } from '$trade/piece/class.ts';
 import type { Deduction } from '$trade/piece/deduction.ts';
 import type { LossClassId } from '$trade/piece/loss-class.ts';
 import { checkPiece, type Content, type Piece, type PieceProblem } from '$trade/piece/piece.ts';
+import { finenessText } from '$ui/format/fineness-text.ts';
 
 /** One metal of the form: the fineness as text, and its exact value while the text has not been touched. */
 export type ContentField = { readonly metal: MetalId; readonly text: string; readonly kept: string | null };
@@ -37,21 +36,6 @@ export type FormProblem = {
 	readonly index: number;
 	readonly problem: WeighingProblem | MarkProblem | FinenessProblem | PieceProblem;
 };
-
-const FINEST = decimal('0.000001');
-
-/** A fineness as text that reads back as the same: parts per thousand, or karats where only those come out even. */
-export function finenessText({ perMille }: Fineness): string {
-	const asDecimal = terminating(perMille);
-	if (asDecimal !== null) return asDecimal;
-	const asKarats = terminating(times(perMille, { n: 24n, d: 1000n }));
-	return asKarats === null ? round(perMille, decimal('0.01'), 'half-even').toFixed() : `${asKarats} kt`;
-}
-
-function terminating(value: Exact): string | null {
-	const rounded = round(value, FINEST, 'half-even');
-	return compareExact(exact(rounded), value) === 0 ? rounded.toFixed(rounded.decimalPlaces()) : null;
-}
 
 export function formOf(piece: Piece): PieceForm {
 	const { weighing: held, article, mark, origin, count, contents, deductions, lossClass, moreThanMelt, note } = piece;

@@ -51,20 +51,23 @@ export function typedSelling({ days, volatility }: SettingsBody, shown: readonly
 	};
 }
 
+/** What is wrong, and the metal whose figure it is in; null: in the days. */
+export type SellingProblem = { readonly metal: MetalId | null; readonly problem: NumberProblem };
+
 /** Days and volatilities; a figure that is the default, or left empty, is not kept as the buyer's own. */
 export function readSelling(
 	typed: TypedSelling,
 	shown: readonly MetalId[],
 	mark: DecimalMark
-): Result<{ readonly days: number; readonly volatility: Volatility }, NumberProblem> {
+): Result<{ readonly days: number; readonly volatility: Volatility }, SellingProblem> {
 	const days = parseNumber(typed.days, { mark, whole: true, most: MOST_DAYS });
-	if (!days.ok) return days;
+	if (!days.ok) return fail({ metal: null, problem: days.problem });
 	const volatility: Volatility = {};
 	for (const metal of shown) {
 		const text = typed.volatility[metal] ?? '';
 		if (text.trim() === '' || text === typedEstimate(volatilityOf(metal), mark)) continue;
 		const read = parseNumber(text, { mark, most: '1000' });
-		if (!read.ok) return read;
+		if (!read.ok) return fail({ metal, problem: read.problem });
 		volatility[metal] = share(read.value);
 	}
 	return ok({ days: days.value.toNumber(), volatility });
