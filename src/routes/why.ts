@@ -10,6 +10,7 @@ import { budget, type BudgetRow } from '$trade/uncertainty/budget.ts';
 import { interval } from '$trade/uncertainty/coverage.ts';
 import type { Uncertain } from '$trade/uncertainty/uncertain.ts';
 import { metalName } from '$ui/metal-name.ts';
+import { className } from '$ui/class-words.ts';
 import type { Shop } from './shop.svelte.ts';
 
 /** What the "why?" sheet shows of one figure. */
@@ -35,7 +36,7 @@ export function sourceWords(source: string, shop: Shop): string {
 	const about = rest.join(':');
 	switch (kind) {
 		case 'class':
-			return `how far this class runs from its mark: ${about.replaceAll('|', ', ')}`;
+			return `how far this class runs from its mark: ${className(about)}`;
 		case 'scale':
 			return `the scale ${shop.scales.find(({ id }) => id === about)?.name ?? ''}, shared by everything weighed on it`;
 		case 'pieces':

@@ -22,3 +22,11 @@ export const lossClassWords: Readonly<Record<LossClassId, string>> = {
 	base: 'base metal',
 	bar: 'a bar or clean shot'
 };
+
+/** A class by its key ("14 kt|chain|us-modern"): "14 kt chain", or "coin, no mark". Symbols of metals get their capital back. */
+export function className(key: string): string {
+	const [stamp = '', article = ''] = key.split('|');
+	if (stamp === 'no mark') return `${article}, no mark`;
+	const named = stamp.replace(/\b(?:au|ag|pd|pt|rh|ir|ru|cu|zn)\b/g, (symbol) => symbol.charAt(0).toUpperCase() + symbol.slice(1));
+	return `${named} ${article}`;
+}
