@@ -31,8 +31,9 @@ export function lotSentence(problem: LotProblem, format: Format): string {
 			);
 		}
 		case 'line-mass-missing':
-			return problem.unsure === null
-				? 'The mass is missing. Write it with its unit, such as 12.4g or 8 dwt.'
+			if (problem.unsure === null) return 'The mass is missing. Write it with its unit, such as 12.4g or 8 dwt.';
+			return /[a-z]\s*$/i.test(problem.unsure.found)
+				? `“${problem.unsure.found}” stands behind a minus sign, so it is taken off. Write the whole mass before it.`
 				: `Is “${problem.unsure.found}” the mass? Write its unit with it, such as ${problem.unsure.found}g.`;
 		case 'line-mark-missing':
 			return problem.words === ''
