@@ -52,10 +52,11 @@ export class Draft<T extends Json> {
 		else await this.#book.setDraft(this.key, this.#value);
 	}
 
-	/** The act that used it up is saved, and the draft went with it. */
+	/** The act that used it up is saved, and the draft went with it; one written while the act was under way goes too. */
 	used(): void {
 		clearTimeout(this.#timer);
 		this.#unsaved = false;
 		this.#value = this.#empty;
+		void this.#book.removeDraft(this.key);
 	}
 }
