@@ -51,7 +51,8 @@ export function priceCurve(entries: readonly Entry<'prices'>[], metal: MetalId, 
 		.filter(({ body }) => body.currency === currency)
 		.map(({ body, quote }) => {
 			const price = priceIn(quote, per);
-			return { at: body.at, value: toNumber(price), price: format.number(price, pricePlaces(body)), when: format.date(body.at) };
+			const when = { when: format.moment(body.at), day: format.date(body.at) };
+			return { at: body.at, value: toNumber(price), price: format.number(price, pricePlaces(body)), ...when };
 		})
 		.reverse();
 	return { title: `${titled(metals[metal].name)}, ${currency} per ${massUnits[per].symbol}`, points, text: curveWords(points, per, format) };
@@ -62,7 +63,7 @@ function pricePlaces({ currency }: PriceSheet): { least: number; most: number } 
 	return { least: minor, most: minor + 1 };
 }
 
-type Point = { readonly value: number; readonly price: string; readonly when: string };
+type Point = { readonly value: number; readonly price: string; readonly when: string; readonly day: string };
 
 /** The picture in words. */
 function curveWords(points: readonly Point[], per: MassUnitId, format: Format): string {
@@ -73,6 +74,9 @@ function curveWords(points: readonly Point[], per: MassUnitId, format: Format): 
 	const high = points.reduce((best, each) => (each.value > best.value ? each : best));
 	const low = points.reduce((best, each) => (each.value < best.value ? each : best));
 	const unit = format.per(per);
-	const ends = `${format.count(points.length)} sheets: ${first.price} ${unit} on ${first.when}, ${last.price} on ${last.when}.`;
-	return high === low ? ends : `${ends} Lowest ${low.price} on ${low.when}, highest ${high.price} on ${high.when}.`;
+	// within one day the hour tells sheets apart
+	const on = (point: Point): string => `${point.price} on ${first.day === last.day ? point.when : point.day}`;
+	const ends = `${format.count(points.length)} sheets, ${unit}: ${on(first)}; ${on(last)}.`;
+	const between = points.length > 2 && high.value > low.value;
+	return between ? `${ends} Lowest ${on(low)}; highest ${on(high)}.` : ends;
 }
