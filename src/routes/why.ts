@@ -11,6 +11,7 @@ import { interval } from '$trade/uncertainty/coverage.ts';
 import type { Uncertain } from '$trade/uncertainty/uncertain.ts';
 import { metalName } from '$ui/metal-name.ts';
 import { className } from '$ui/class-words.ts';
+import { cashRounding } from './cash-rounding.ts';
 import type { Shop } from './shop.svelte.ts';
 
 /** What the "why?" sheet shows of one figure. */
@@ -116,6 +117,7 @@ export function whyOffer(shop: Shop, value: Value, offer: Offer): Why | null {
 	const { sheet, format, settings } = shop;
 	if (sheet === null) return null;
 	const { currency } = sheet.body;
+	const { step } = cashRounding(settings, currency);
 	return {
 		title: 'Offer',
 		figure: format.money(offer.offer),
@@ -126,7 +128,7 @@ export function whyOffer(shop: Shop, value: Value, offer: Offer): Why | null {
 			...settings.tiers.map(({ from, share }) => ({ name: `Tier from ${format.money({ amount: from, currency })}`, value: format.share(share) })),
 			{
 				name: 'Rounded down to',
-				value: settings.cashStep === null ? 'the minor unit' : format.money({ amount: settings.cashStep, currency })
+				value: step === undefined ? 'the minor unit' : format.money({ amount: step, currency })
 			}
 		],
 		formula: 'Melt value × the share of the highest tier it reaches, rounded down once.',

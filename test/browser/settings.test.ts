@@ -99,6 +99,30 @@ describe('the settings, without a signal', () => {
 		expect(await unit.inputValue()).toBe('gr');
 	});
 
+	it('keep the cash step to its own currency: a sheet in another one goes to the coins of that one', async () => {
+		const { site, page } = await settingsOffline();
+		const money = part(page, 'Money');
+		await money.getByLabel('Offers are rounded down to steps of').fill('0.25');
+		await press(page, 'Save the cash step');
+		await said(page, 'Offers go in steps of 0.25 USD.');
+		const offered = async (currency: string, offer: RegExp): Promise<void> => {
+			await page.goto(site.url('/prices'));
+			await page.getByLabel('Currency', { exact: true }).selectOption(currency);
+			await page.getByRole('textbox', { name: 'Gold', exact: true }).fill('4186.20');
+			await press(page, 'Save prices');
+			await said(page, 'Prices saved.');
+			await page.goto(site.url('/'));
+			await page.locator('.dock dd').nth(1).filter({ hasText: offer }).waitFor();
+		};
+		await page.goto(site.url('/'));
+		await page.getByLabel('Mass, mark, article and count of a piece').fill('14k chain 10 g');
+		await press(page, 'Add the piece');
+		await said(page, 'added.');
+		// 10 g x 14/24 x 4186.20 / 31.1034768 x 0.85 = 667.336...
+		await offered('USD', /667\.25/);
+		await offered('JPY', /667(?![.,]?\d)/);
+	});
+
 	it('take shares by value, refuse what cannot be paid, and keep the form', async () => {
 		const { page } = await settingsOffline();
 		const shares = part(page, 'Share of the value that is paid');
