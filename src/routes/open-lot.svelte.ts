@@ -33,6 +33,8 @@ export class OpenLot {
 	#pieces = new Map<string, Entry<'piece'>>();
 	#window = { from: 0, to: 40 };
 	#reads = 0;
+	/** The lot that the last read was asked for; `id` follows when it is there. */
+	#wanted: string | null = null;
 
 	constructor(shop: Shop) {
 		this.#shop = shop;
@@ -42,15 +44,9 @@ export class OpenLot {
 		return this.entry?.body ?? null;
 	}
 
-	/** Shows another lot, or none. */
+	/** Shows another lot, or none; the one shown stays until the other has been read. */
 	async open(id: string | null): Promise<void> {
-		this.id = id;
-		await this.read();
-	}
-
-	/** Reads the lot again as it stands. */
-	async read(): Promise<void> {
-		const { id } = this;
+		this.#wanted = id;
 		this.#reads += 1;
 		const turn = this.#reads;
 		const { book } = this.#shop;
@@ -59,6 +55,7 @@ export class OpenLot {
 		const pieces = await this.#load(keys.slice(from, to));
 		// a later read has begun meanwhile: it will show what is newer
 		if (turn !== this.#reads) return;
+		this.id = id;
 		this.entry = found?.lot ?? null;
 		this.sums = found?.sums ?? emptySums();
 		this.damaged = found?.damaged ?? [];
@@ -66,6 +63,11 @@ export class OpenLot {
 		this.#pieces = pieces;
 		this.ready = true;
 		this.revision += 1;
+	}
+
+	/** Reads the lot again as it stands. */
+	read(): Promise<void> {
+		return this.open(this.#wanted);
 	}
 
 	async #load(keys: readonly string[]): Promise<Map<string, Entry<'piece'>>> {
