@@ -2,7 +2,7 @@ import { BOOK, DEMO_BOOK, openBook, removeBook } from '$storage/book.ts';
 import type { MarkerReading } from '$storage/marker.ts';
 import type { StorageProblem } from '$storage/problem.ts';
 import { formatFor } from '$ui/format.ts';
-import { sentence } from '$ui/sentences.ts';
+import { sayProblem } from './say-problem.ts';
 import { Shop } from './shop.svelte.ts';
 
 const WHICH = 'meltbook-open';
@@ -27,7 +27,7 @@ export class Opening {
 			return;
 		}
 		const { book, readOnly, marker } = opened.value;
-		if (readOnly !== null) this.readOnly = sentence(readOnly, formatFor(navigator.language));
+		if (readOnly !== null) this.readOnly = await sayProblem(readOnly, formatFor(navigator.language));
 		const shop = new Shop(book, demo);
 		if (demo && readOnly === null && (await book.counts()).records === 0) {
 			const { fillDemo } = await import('./demo.ts');
@@ -42,7 +42,7 @@ export class Opening {
 		}
 		const stopEvents = book.onEvent((event) => {
 			if (event.kind === 'superseded' || event.kind === 'removed') {
-				this.readOnly = sentence({ kind: 'storage-superseded' }, formatFor(navigator.language));
+				void sayProblem({ kind: 'storage-superseded' }, formatFor(navigator.language)).then((said) => (this.readOnly = said));
 			}
 		});
 		const stopShop = await shop.start();
@@ -82,7 +82,7 @@ export class Opening {
 		const removed = await removeBook(DEMO_BOOK);
 		const shop = this.shop as Shop | null;
 		if (removed.ok) shop?.say('The demo book is removed. This is your own book.');
-		else shop?.say(sentence(removed.problem, shop.format));
+		else shop?.say(await sayProblem(removed.problem, shop.format));
 	}
 
 	async #again(): Promise<void> {

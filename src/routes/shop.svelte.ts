@@ -9,8 +9,8 @@ import type { PriceSheet } from '$trade/price/price-sheet.ts';
 import { defaultSettings, type SettingsBody } from '$trade/record/kinds/settings.ts';
 import type { StoredRecord } from '$trade/record/record.ts';
 import { formatFor, type Format } from '$ui/format.ts';
-import { sentence } from '$ui/sentences.ts';
 import type { Opening } from './opening.svelte.ts';
+import { sayProblem } from './say-problem.ts';
 
 type Message = { readonly id: number; readonly text: string; readonly onundo?: () => void };
 type Sheet = { readonly subject: string; readonly body: PriceSheet };
@@ -96,7 +96,7 @@ export class Shop {
 			const ids = result.value.map(({ id }) => id);
 			this.say(said, () => void this.#undo(ids));
 		} else {
-			this.say(`Not saved. ${sentence(result.problem, this.format)}`);
+			this.say(`Not saved. ${await sayProblem(result.problem, this.format)}`);
 		}
 		return result;
 	}
@@ -104,7 +104,7 @@ export class Shop {
 	async #undo(ids: readonly string[]): Promise<void> {
 		const changes = await this.book.undoOf(ids);
 		const result = changes.ok ? await this.book.append(changes.value) : changes;
-		this.say(result.ok ? 'Taken back.' : `Not taken back. ${sentence(result.problem, this.format)}`);
+		this.say(result.ok ? 'Taken back.' : `Not taken back. ${await sayProblem(result.problem, this.format)}`);
 	}
 
 	say(text: string, onundo?: () => void): void {

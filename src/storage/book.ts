@@ -2,22 +2,19 @@ import { fail, ok, type Result } from '$trade/number/result.ts';
 import type { Json } from '$trade/record/json.ts';
 import type { RecordKind } from '$trade/record/kind.ts';
 import type { StoredRecord } from '$trade/record/record.ts';
-import { append, type AppendOptions, type Change } from './append.ts';
-import { handedOver, makeBackup, type BackupFile, type BackupTarget } from './backup.ts';
+import type { AppendOptions, Change } from './append.ts';
+import type { BackupFile, BackupTarget } from './backup.ts';
 import type { Running } from './backup-format.ts';
-import { checkBook, rebuild } from './check.ts';
 import { getDraft, listDrafts, removeDraft, setDraft } from './drafts.ts';
 import { browserEnvironment, type Environment } from './environment.ts';
 import { newId } from './ids.ts';
 import { compareMarker, readMarker, removeMarker, type MarkerReading } from './marker.ts';
-import { mergeRecords } from './merge.ts';
 import { openSession, type Session } from './open.ts';
 import { readPhoto } from './photos.ts';
 import { problemOf, StorageFailure, type StorageProblem } from './problem.ts';
 import * as read from './read.ts';
-import { previewBackup, restore, type RestorePreview } from './restore.ts';
+import type { RestorePreview } from './restore.ts';
 import type { BookRow } from './schema.ts';
-import { undoOf } from './undo.ts';
 
 /** The buyer's own book, and the one with an invented scenario. They never share anything. */
 export const BOOK = 'meltbook';
@@ -95,7 +92,10 @@ export async function removeBook(name: string, { indexedDB, outside }: Environme
 	}
 }
 
-/** Everything that a page may do with a book. Reads reject with a StorageFailure; acts answer with a Result. */
+/**
+ * Everything that a page may do with a book. Reads reject with a StorageFailure; acts answer with a Result. What only acts
+ * need is loaded with the first of them: a page is drawn from reads.
+ */
 export type Book = ReturnType<typeof bookOf>;
 
 function bookOf(session: Session) {
@@ -104,8 +104,8 @@ function bookOf(session: Session) {
 		get readOnly() {
 			return session.readOnly;
 		},
-		append: (changes: readonly Change[], options?: AppendOptions) => append(session, changes, options),
-		undoOf: (recordIds: readonly string[]) => undoOf(session, recordIds),
+		append: async (changes: readonly Change[], options?: AppendOptions) => (await import('./append.ts')).append(session, changes, options),
+		undoOf: async (recordIds: readonly string[]) => (await import('./undo.ts')).undoOf(session, recordIds),
 
 		get: <K extends RecordKind>(kind: K, subject: string) => read.get(session, kind, subject),
 		standing: (subject: string) => read.standing(session, subject),
@@ -132,16 +132,17 @@ function bookOf(session: Session) {
 		removeDraft: (key: string) => removeDraft(session, key),
 		listDrafts: (prefix?: string) => listDrafts(session, prefix),
 
-		backup: (options?: Running & { readonly target?: BackupTarget }) => makeBackup(session, options),
+		backup: async (options?: Running & { readonly target?: BackupTarget }) =>
+			(await import('./backup.ts')).makeBackup(session, options),
 		/** Call when the person has the file. */
-		handedOver: (file: BackupFile) => handedOver(session, file),
-		previewBackup: (file: Blob, running?: Running) => previewBackup(session, file, running),
-		restore: (preview: RestorePreview, running?: Running) => restore(session, preview, running),
+		handedOver: async (file: BackupFile) => (await import('./backup.ts')).handedOver(session, file),
+		previewBackup: async (file: Blob, running?: Running) => (await import('./restore.ts')).previewBackup(session, file, running),
+		restore: async (preview: RestorePreview, running?: Running) => (await import('./restore.ts')).restore(session, preview, running),
 		/** Joins checked records of another phone. */
-		merge: (records: readonly StoredRecord[]) => mergeRecords(session, records),
+		merge: async (records: readonly StoredRecord[]) => (await import('./merge.ts')).mergeRecords(session, records),
 
-		check: (running?: Running) => checkBook(session, running),
-		rebuild: () => rebuild(session),
+		check: async (running?: Running) => (await import('./check.ts')).checkBook(session, running),
+		rebuild: async () => (await import('./check.ts')).rebuild(session),
 
 		/** Calls fn after every committed change, in this tab or another; gives back the way to stop. */
 		watch: session.watchers.watch,

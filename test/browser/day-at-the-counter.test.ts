@@ -146,7 +146,7 @@ async function addByLine(page: Page, text: string): Promise<void> {
 	await line(page).fill(text);
 	await line(page).press('Enter');
 	await page.waitForFunction((count) => document.querySelectorAll('[data-row]').length > count, before);
-	expect(await line(page).inputValue()).toBe('');
+	await page.waitForFunction(() => document.querySelector<HTMLInputElement>('.entry input')?.value === '');
 }
 
 /** Rows of a table by the words of their first cell. */
