@@ -216,11 +216,12 @@ describe('the watch over pages', () => {
 		await visitor.page.goto(host.url('/manifest.webmanifest'));
 		await visitor.page.evaluate((url) => fetch(url, { mode: 'no-cors' }).catch(() => undefined), other.url('/'));
 		await other.stop();
+		// this one is closed before it is judged, so that nothing stays open when the judgement fails
+		await expect(visitor.close()).rejects.toThrow(/raised an error/);
 		const { errors, policy, outside } = visitor.breaches;
 		// a bare file has no page of ours to name its icon, so the browser asks for the usual one
 		expect(errors.filter((error) => !error.includes('/favicon.ico'))).toEqual([expect.stringContaining('planted')]);
 		expect(policy.join('\n')).toContain('script-src');
 		expect(outside).toEqual([`GET ${other.url('/')}`]);
-		await expect(visitor.close()).rejects.toThrow(/raised an error/);
 	});
 });
