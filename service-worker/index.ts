@@ -29,7 +29,9 @@ function entry(url: string): PrecacheEntry {
 	return { url, revision };
 }
 
-const needed = [...new Set([...build, ...files, ...prerendered, SHELL])].map(entry);
+// pictures for the browser's own offer to install are no part of the app
+const ours = files.filter((url) => !url.startsWith(`${base}/screenshots/`));
+const needed = [...new Set([...build, ...ours, ...prerendered, SHELL])].map(entry);
 
 precacheAndRoute(needed);
 cleanupOutdatedCaches();
