@@ -271,7 +271,9 @@ describe('a day at the counter', () => {
 		await page.getByRole('link', { name: 'Turn back' }).click();
 
 		// undo: a piece too many goes away as if it had never been there
+		await page.waitForFunction(() => document.querySelectorAll('[data-row]').length === 12);
 		await addByLine(page, '9k ring 1.10 g');
+		await page.getByRole('link', { name: /9 kt ring/ }).waitFor();
 		expect(await readDock()).not.toContain(`$${printed(value, 2)}`);
 		await page.getByRole('button', { name: 'Undo' }).click();
 		await said(page, 'Taken back.');
