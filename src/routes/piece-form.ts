@@ -6,7 +6,7 @@ import { weighing, type WeighingProblem } from '$trade/mass/weighing.ts';
 import type { Scale } from '$trade/mass/scale.ts';
 import { exactFromText, exactToText, reduce } from '$trade/number/exact.ts';
 import type { DecimalMark } from '$trade/number/field.ts';
-import type { Origin } from '$trade/piece/class.ts';
+import type { Origin } from '$trade/evidence/origin.ts';
 import type { Deduction } from '$trade/piece/deduction.ts';
 import type { LossClassId } from '$trade/piece/loss-class.ts';
 import { checkPiece, type Content, type Piece, type PieceProblem } from '$trade/piece/piece.ts';

@@ -1,4 +1,4 @@
-import type { Origin } from '$trade/piece/class.ts';
+import type { Origin } from '$trade/evidence/origin.ts';
 import type { LossClassId } from '$trade/piece/loss-class.ts';
 
 /** Where a piece comes from, which decides how far its mark is believed. */

@@ -4,7 +4,7 @@ import type { Scale } from '../mass/scale.ts';
 import type { MassUnitId, UnitProblem } from '../mass/units.ts';
 import type { CoinProblem } from '../metal/coins.ts';
 import type { MarkProblem } from '../metal/mark.ts';
-import type { Origin } from '../piece/class.ts';
+import type { Origin } from '../evidence/origin.ts';
 import type { PieceProblem } from '../piece/piece.ts';
 
 /** Where in the typed line something stands (offsets as in String.slice), and what stands there. */

@@ -1,4 +1,4 @@
-import type { Origin } from '../piece/class.ts';
+import type { Origin } from '../evidence/origin.ts';
 
 /** A part of a typed line and where it stands. Nothing is understood yet. */
 export type Token = {

@@ -3,7 +3,7 @@ import { compareExact, exactFromText, exactToText, EXACT_ZERO } from '../number/
 import { fail, type Result } from '../number/result.ts';
 import { massUnits, type MassUnitId } from '../mass/units.ts';
 import { isMetalId } from '../metal/metals.ts';
-import { isOrigin } from '../piece/class.ts';
+import { isOrigin } from '../evidence/origin.ts';
 import { isDeductionKind, type Deduction } from '../piece/deduction.ts';
 import { isLossClass } from '../piece/loss-class.ts';
 import { checkPiece, type Content, type Piece } from '../piece/piece.ts';

@@ -4,7 +4,7 @@ import { fail, ok, type Result } from '../number/result.ts';
 import { parseUnit, toMass, type MassUnitId } from '../mass/units.ts';
 import { findCoin } from '../metal/coins.ts';
 import { parseMark, type Mark } from '../metal/mark.ts';
-import { isOrigin } from '../piece/class.ts';
+import { isOrigin } from '../evidence/origin.ts';
 import { statedDeduction } from '../piece/deduction.ts';
 import { checkPiece, type Piece } from '../piece/piece.ts';
 import { guessDelimiter, splitRows, unguard, type Delimiter, type Row } from './csv.ts';

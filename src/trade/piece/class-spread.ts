@@ -1,4 +1,4 @@
-import type { Origin } from './class.ts';
+import type { Origin } from '../evidence/origin.ts';
 
 /**
  * How far pieces run from the fineness they are taken at, as relative standard uncertainties:

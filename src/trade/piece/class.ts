@@ -1,23 +1,5 @@
 import { findCoin } from '../metal/coins.ts';
-
-/**
- * The class of a piece: stamp x article x origin, the unit about which something can be learned.
- * Two pieces of one class share the class's error: forty chains of one class do not average it out.
- */
-export type Origin = 'hallmarked' | 'us-modern' | 'us-before-1981' | 'uncontrolled' | 'unmarked' | 'stranger-bar';
-
-export const origins: readonly Origin[] = [
-	'hallmarked',
-	'us-modern',
-	'us-before-1981',
-	'uncontrolled',
-	'unmarked',
-	'stranger-bar'
-];
-
-export function isOrigin(text: string): text is Origin {
-	return (origins as readonly string[]).includes(text);
-}
+import type { Origin } from '../evidence/origin.ts';
 
 /** The articles that make a class, each with the words a buyer types for it. Anything else is "other", so classes stay few. */
 const ARTICLES: readonly (readonly [article: string, words: readonly string[]])[] = [
@@ -73,7 +55,10 @@ function readClass(article: string): string {
 	return ARTICLES.find(([name]) => words.has(name))?.[0] ?? (findCoin(article).ok ? 'coin' : 'other');
 }
 
-/** "14 kt|chain|us-modern": the text under which a class is counted and learned about. */
+/**
+ * The class of a piece: stamp x article x origin, the unit about which something can be learned. Two pieces of one class share
+ * the class's error: forty chains of one class do not average it out. "14 kt|chain|us-modern" is the text it is counted under.
+ */
 export function classKey(of: { readonly stamp: string; readonly article: string; readonly origin: Origin }): string {
 	const stamp = of.stamp.trim().toLowerCase().replace(/\s+/g, ' ').replaceAll('|', '/');
 	return `${stamp === '' ? 'no mark' : stamp}|${articleClass(of.article)}|${of.origin}`;

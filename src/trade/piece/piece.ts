@@ -8,7 +8,9 @@ import { massOf, massUncertainty, type Weighing } from '../mass/weighing.ts';
 import { fineMass, type FineMass } from '../metal/fine-mass.ts';
 import { shareOf, type Fineness } from '../metal/fineness.ts';
 import type { MetalId } from '../metal/metals.ts';
-import { classKey, type Origin } from './class.ts';
+import type { Evidence } from '../evidence/belief.ts';
+import type { Origin } from '../evidence/origin.ts';
+import { classKey } from './class.ts';
 import { spreadFor, type Spread, type SpreadId } from './class-spread.ts';
 import { totalDeduction, totalDeductionU, type Deduction } from './deduction.ts';
 import type { LossClassId } from './loss-class.ts';
@@ -33,6 +35,8 @@ export type Piece = {
 	readonly note: string;
 	/** Names of photos, each the SHA-256 of its bytes. */
 	readonly photos: readonly string[];
+	/** What was tested, and what follows from it; absent while nothing was. */
+	readonly evidence?: Evidence;
 };
 
 export type PieceProblem =

@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { articleClass, classKey, isOrigin, origins } from '../../../src/trade/piece/class.ts';
+import { origins } from '../../../src/trade/evidence/origin.ts';
+import { articleClass, classKey } from '../../../src/trade/piece/class.ts';
 
 describe('the class of a piece', () => {
 	it.each([
@@ -20,10 +21,5 @@ describe('the class of a piece', () => {
 			}),
 			{ numRuns: 1_000 }
 		);
-	});
-
-	it('knows its origins', () => {
-		expect(origins.every(isOrigin)).toBe(true);
-		expect(isOrigin('moon')).toBe(false);
 	});
 });

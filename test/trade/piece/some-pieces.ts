@@ -3,7 +3,7 @@ import { decimal } from '../../../src/trade/number/decimal.ts';
 import { ratio } from '../../../src/trade/number/exact.ts';
 import { massUnits, type MassUnitId } from '../../../src/trade/mass/units.ts';
 import { metalIds, type MetalId } from '../../../src/trade/metal/metals.ts';
-import { origins } from '../../../src/trade/piece/class.ts';
+import { origins } from '../../../src/trade/evidence/origin.ts';
 import { deductionKinds, type Deduction } from '../../../src/trade/piece/deduction.ts';
 import { lossClasses } from '../../../src/trade/piece/loss-class.ts';
 import { checkPiece, type Piece } from '../../../src/trade/piece/piece.ts';

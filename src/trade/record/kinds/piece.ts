@@ -2,7 +2,7 @@ import type { Mass } from '../../mass/mass.ts';
 import { exact, compareExact } from '../../number/exact.ts';
 import { ONE } from '../../number/decimal.ts';
 import type { Fineness } from '../../metal/fineness.ts';
-import { origins } from '../../piece/class.ts';
+import { origins } from '../../evidence/origin.ts';
 import { deductionKinds, type Deduction } from '../../piece/deduction.ts';
 import { lossClasses } from '../../piece/loss-class.ts';
 import { checkPiece, type Content, type Piece } from '../../piece/piece.ts';
