@@ -33,6 +33,8 @@ export function loadSums(stored: unknown): LotSums | null {
 		const found = stored as Stored;
 		return {
 			...found,
+			// sums that an older release wrote hold no findings
+			expected: found.expected ?? {},
 			gross: decimal(found.gross),
 			net: decimal(found.net),
 			fine: loadFine(found.fine),

@@ -19,6 +19,7 @@ export function joinSums(lots: Iterable<LotSums>): LotSums {
 			fine: joinFine(all.fine, lot.fine),
 			byClass: joinBy(all.byClass, lot.byClass, joinClass),
 			shared: joinBy(all.shared, lot.shared, (a, b) => joinBy(a as Record<string, bigint>, b as Record<string, bigint>, addWhole)),
+			expected: joinBy(all.expected as Record<string, bigint>, lot.expected as Record<string, bigint>, addWhole),
 			own: joinBy(all.own, lot.own, addWhole)
 		};
 	}

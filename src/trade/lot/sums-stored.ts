@@ -22,6 +22,7 @@ export type LotSumsText = {
 	readonly fine: Texts;
 	readonly byClass: { readonly [group: string]: ClassSumsText };
 	readonly shared: { readonly [source: string]: Texts };
+	readonly expected: Texts;
 	readonly own: Texts;
 };
 
@@ -38,6 +39,7 @@ export function encodeSums(sums: LotSums): LotSumsText {
 		fine: mapValues(sums.fine, exactToText),
 		byClass: mapValues(sums.byClass, ({ net, fine, ...rest }) => ({ ...rest, net: net.toFixed(), fine: mapValues(fine, exactToText) })),
 		shared: mapValues(sums.shared, (by) => mapValues(by, (ng) => ng.toString())),
+		expected: mapValues(sums.expected, (ng) => ng.toString()),
 		own: mapValues(sums.own, (product) => product.toString())
 	};
 }
@@ -50,10 +52,11 @@ export function decodeSums(stored: unknown): LotSums | null {
 	const fine = readFine(stored.fine);
 	const byClass = readAll(stored.byClass, readClass);
 	const shared = readAll(stored.shared, (by) => readAll(by, whole, (name) => isQuantity(name)));
+	const expected = readAll(stored.expected, whole, isMetalId);
 	const own = readAll(stored.own, whole, (name) => name.split(' ').length === 2 && name.split(' ').every(isQuantity));
 	if (entries === null || pieces === null || gross === null || net === null) return null;
-	if (fine === null || byClass === null || shared === null || own === null) return null;
-	return { entries, pieces, gross, net, fine, byClass, shared: shared as LotSums['shared'], own };
+	if (fine === null || byClass === null || shared === null || expected === null || own === null) return null;
+	return { entries, pieces, gross, net, fine, byClass, shared: shared as LotSums['shared'], expected, own };
 }
 
 function isPlain(value: unknown): value is Readonly<Record<string, unknown>> {

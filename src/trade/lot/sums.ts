@@ -45,12 +45,14 @@ export type LotSums = {
 	readonly byClass: Readonly<Record<string, ClassSums>>;
 	/** Standard uncertainties of errors that pieces share, added with their sign: nanograms, by source and quantity. */
 	readonly shared: Readonly<Record<string, Partial<Readonly<Record<Quantity, bigint>>>>>;
+	/** Nanograms by which the fine mass is expected to differ from what was taken, where findings say so. */
+	readonly expected: Partial<Readonly<Record<MetalId, bigint>>>;
 	/** Sums of products of the errors that each piece has for itself, in nanograms squared, under "Au Cu", "net net" and so on. */
 	readonly own: Readonly<Record<string, bigint>>;
 };
 
 export function emptySums(): LotSums {
-	return { entries: 0, pieces: 0, gross: ZERO, net: ZERO, fine: {}, byClass: {}, shared: {}, own: {} };
+	return { entries: 0, pieces: 0, gross: ZERO, net: ZERO, fine: {}, byClass: {}, shared: {}, expected: {}, own: {} };
 }
 
 /** One entry of a lot with the name under which its own errors are kept apart from those of every other. */
@@ -84,16 +86,18 @@ export function addPieces(sums: LotSums, entries: Iterable<Entry>, spreads?: Spr
 }
 
 type Writable<T> = { -readonly [K in keyof T]: T[K] };
-type Working = Writable<Omit<LotSums, 'fine' | 'byClass' | 'shared' | 'own'>> & {
+type Working = Writable<Omit<LotSums, 'fine' | 'byClass' | 'shared' | 'expected' | 'own'>> & {
 	fine: Partial<Record<MetalId, Exact>>;
 	byClass: Record<string, ClassSums>;
 	shared: Record<string, Partial<Readonly<Record<Quantity, bigint>>>>;
+	expected: Partial<Record<MetalId, bigint>>;
 	own: Record<string, bigint>;
 };
 
 /** As large as the metals and classes of the lot, not as its pieces. */
 function workingCopy(sums: LotSums): Working {
-	return { ...sums, fine: { ...sums.fine }, byClass: { ...sums.byClass }, shared: { ...sums.shared }, own: { ...sums.own } };
+	const { fine, byClass, shared, expected, own } = sums;
+	return { ...sums, fine: { ...fine }, byClass: { ...byClass }, shared: { ...shared }, expected: { ...expected }, own: { ...own } };
 }
 
 function apply(work: Working, { piece, key, scale }: Entry, sign: 1 | -1, spreads: Spreads | undefined): void {
@@ -121,7 +125,19 @@ function apply(work: Working, { piece, key, scale }: Entry, sign: 1 | -1, spread
 			fine: ofClass
 		};
 	}
-	moveErrors(work, estimate(piece, key, scale, spreads), sign);
+	const estimated = estimate(piece, key, scale, spreads);
+	moveErrors(work, estimated, sign);
+	const believed = piece.evidence?.belief?.metal;
+	if (believed !== undefined) moveExpected(work.expected, fine.filter(([metal]) => metal === believed), estimated, sign);
+}
+
+function moveExpected(into: Partial<Record<MetalId, bigint>>, taken: readonly [MetalId, Exact][], { fine }: Estimate, sign: 1 | -1): void {
+	for (const [metal, grams] of taken) {
+		const apart = nanograms(fine[metal]!.value - toNumber(grams));
+		const after = (into[metal] ?? 0n) + (sign === 1 ? apart : -apart);
+		if (after === 0n) delete into[metal];
+		else into[metal] = after;
+	}
 }
 
 function moveFine(into: Partial<Record<MetalId, Exact>>, fine: readonly [MetalId, Exact][], sign: 1 | -1): void {
@@ -138,7 +154,7 @@ function nanograms(grams: number): bigint {
 	return BigInt(Math.round(grams * 1e9));
 }
 
-const SHARED = /^(?:scale|class):/;
+const SHARED = /^(?:scale|class|tester):/;
 
 function moveErrors(work: Working, { net, fine }: Estimate, sign: 1 | -1): void {
 	const quantities: [Quantity, Uncertain][] = [['net', net], ...(Object.entries(fine) as [MetalId, Uncertain][])];
@@ -177,13 +193,14 @@ function pairName(a: Quantity, b: Quantity): string {
 
 /**
  * The fine mass of each metal of the lot, or its net mass, with what makes it uncertain by source.
- * formula: value = the exact sum in grams; each shared source its sum; "pieces:<quantity>" = root of the sum of squares of all
- * errors that single pieces have for themselves.
+ * formula: value = the exact sum in grams, moved by what findings lead to expect beside what was taken; each shared source its sum;
+ * "pieces:<quantity>" = root of the sum of squares of all errors that single pieces have for themselves.
  * rounding: none (an estimate).
  * source: JCGM 100:2008 (GUM) 5.2.2.
  */
 export function estimateOf(sums: LotSums, quantity: Quantity): Uncertain {
-	const value = quantity === 'net' ? sums.net.toNumber() : toNumber(sums.fine[quantity] ?? EXACT_ZERO);
+	const value =
+		quantity === 'net' ? sums.net.toNumber() : toNumber(sums.fine[quantity] ?? EXACT_ZERO) + Number(sums.expected[quantity] ?? 0n) / 1e9;
 	const contributions: Record<string, number> = {};
 	for (const [source, by] of Object.entries(sums.shared)) {
 		const ng = by[quantity];

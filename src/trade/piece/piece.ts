@@ -8,7 +8,7 @@ import { massOf, massUncertainty, type Weighing } from '../mass/weighing.ts';
 import { fineMass, type FineMass } from '../metal/fine-mass.ts';
 import { shareOf, type Fineness } from '../metal/fineness.ts';
 import type { MetalId } from '../metal/metals.ts';
-import type { Evidence } from '../evidence/belief.ts';
+import type { Belief, Evidence } from '../evidence/belief.ts';
 import type { Origin } from '../evidence/origin.ts';
 import { classKey } from './class.ts';
 import { spreadFor, type Spread, type SpreadId } from './class-spread.ts';
@@ -140,8 +140,9 @@ export type Estimate = {
 
 /**
  * Net and fine mass with everything that makes them uncertain, each under its source.
- * formula: fine = net x share. Sources: reading:<key> and scale:<id> as in mass/weighing; deduction:<key> = root of the sum of
- * squares of the deductions; class:<class> = fine x shared spread; piece:<key> = fine x own spread / √count. Grams throughout.
+ * formula: fine = net x share taken, or net x mean of the belief where findings made one. Sources: reading:<key> and scale:<id> as in
+ * mass/weighing; deduction:<key> = root of the sum of squares of the deductions; then either class:<class> = fine x shared spread and
+ * piece:<key> = fine x own spread / √count, or, with a belief, tester:<id> = net x shared and piece:<key> = net x own. Grams throughout.
  * rounding: none (an estimate). The class's error is taken to move all metals of a piece the same way, which is the prudent side.
  * source: JCGM 100:2008 (GUM) 5.1.2 and F.1.2; the spreads are working defaults, common practice, no source.
  */
@@ -162,7 +163,12 @@ export function estimate(
 	const spread = spreadFor(piece.mark, piece.origin, spreads);
 	const shared = `class:${classKey({ stamp: piece.mark, article: piece.article, origin: piece.origin })}`;
 	const fine: Partial<Record<MetalId, Uncertain>> = {};
+	const belief = piece.evidence?.belief ?? null;
 	for (const { metal, taken } of piece.contents) {
+		if (belief?.metal === metal) {
+			fine[metal] = believed(belief, net, key);
+			continue;
+		}
 		const share = toNumber(shareOf(taken));
 		const value = toNumber(times(exact(exactNet), shareOf(taken)));
 		fine[metal] = propagate(value, [
@@ -172,4 +178,14 @@ export function estimate(
 		]);
 	}
 	return { net, fine };
+}
+
+/** Fine mass by what was found: the doubt of the class gives way to that of the findings. */
+function believed({ mean, shared, own }: Belief, net: Uncertain, key: string): Uncertain {
+	const part = (source: string, perMille: number) => ({ input: uncertain(0, source, perMille / 1000), sensitivity: net.value });
+	return propagate((net.value * mean) / 1000, [
+		{ input: net, sensitivity: mean / 1000 },
+		...Object.entries(shared).map(([tester, u]) => part(`tester:${tester}`, u)),
+		part(`piece:${key}`, own)
+	]);
 }

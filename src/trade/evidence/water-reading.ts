@@ -1,0 +1,143 @@
+import { normalCdf } from '../uncertainty/normal.ts';
+import { standardUncertainty } from '../uncertainty/uncertain.ts';
+import { claimOf, densityRange, familiesOf } from '../metal/families.ts';
+import { lookAlike, type LookAlikeId } from '../metal/look-alikes.ts';
+import { idealDensity } from '../metal/density.ts';
+import { metals } from '../metal/metals.ts';
+import type { Build } from './belief.ts';
+import type { Water } from './finding.ts';
+import type { Balance } from './fluorescence.ts';
+import { CELLS, type Vector } from './grid.ts';
+import type { Observation } from './observation.ts';
+import type { MainMetal } from './subject.ts';
+import { densityByWater } from './water-weighing.ts';
+
+/** An honest piece that holds air or stone dust weighs too light in water: how often, and by what share on average. Working defaults. */
+const INNOCENT: Readonly<Record<Build, { readonly chance: number; readonly share: number }>> = {
+	solid: { chance: 0.005, share: 0.1 },
+	jointed: { chance: 0.05, share: 0.15 },
+	hollow: { chance: 0.25, share: 0.35 }
+};
+/** The chance of a slip of the pen or a wet thread, which may give any density from 1 to 25 g/cm³. */
+const SLIP = 0.01;
+const ANY_DENSITY = 1 / 24;
+/** A balance that was read is the family's own with this chance; its parts are good to about so much in density. */
+const BELIEVED = 0.97;
+const BALANCE_U = 0.006;
+
+/** The chance of a density reading per g/cm³ when the truth lies evenly between two densities and the reading has a bell's error. */
+export function evenly(density: number, low: number, high: number, u: number): number {
+	if (high - low < u / 50) {
+		const z = (density - (low + high) / 2) / u;
+		return Math.exp((-z * z) / 2) / (u * Math.sqrt(2 * Math.PI));
+	}
+	return (normalCdf((density - low) / u) - normalCdf((density - high) / u)) / (high - low);
+}
+
+type Range = { readonly low: number; readonly high: number; readonly limit: number };
+/** The densities of a family by fineness never change; they are worked out once. */
+const RANGES = new Map<string, readonly Range[]>();
+
+function rangesOf(family: ReturnType<typeof familiesOf>[number]): readonly Range[] {
+	const known = RANGES.get(family.id);
+	if (known !== undefined) return known;
+	const made = Array.from({ length: CELLS }, (_, perMille): Range => {
+		const { low, high } = densityRange(family, perMille);
+		const { bias, limit } = claimOf(family, perMille);
+		return { low: low * (1 + bias), high: high * (1 + bias), limit };
+	});
+	RANGES.set(family.id, made);
+	return made;
+}
+
+/** Beyond this many standard deviations a family has no part in a reading. */
+const REACH = 9;
+
+/**
+ * How likely a density is for a piece of one alloy, by its fineness.
+ * formula: sum over colour families of weight x evenly between the family's densities, with u = √(u of the reading² + (mixing limit x
+ * density / √3)²); where the balance was read by fluorescence, 97 % of it by the density of that balance instead. Per g/cm³.
+ * rounding: none.
+ * source: ideal mixing (metal/density.ts) with the honest claim of each family; JCGM 100:2008, 4.3.7 for limits as rectangles.
+ */
+export function solidDensity(density: number, u: number, metal: MainMetal, balance: Balance | null): Vector {
+	const values = new Float64Array(CELLS);
+	const families = familiesOf(metal);
+	const total = families.reduce((sum, { weight }) => sum + weight, 0);
+	const share = (balance === null ? 1 : 1 - BELIEVED) / total;
+	for (const family of families) {
+		rangesOf(family).forEach(({ low, high, limit }, cell) => {
+			const all = Math.hypot(u, (limit * density) / Math.sqrt(3));
+			if (density < low - REACH * all || density > high + REACH * all) return;
+			values[cell]! += family.weight * share * evenly(density, low, high, all);
+		});
+	}
+	if (balance === null) return values;
+	const rest = idealDensity(balance.map((part) => ({ share: part.share, density: metals[part.metal].density })));
+	for (let cell = 0; cell < CELLS; cell += 1) {
+		const ideal = idealDensity([{ share: cell / 1000, density: metals[metal].density }, { share: 1 - cell / 1000, density: rest }]);
+		const limit = Math.min(...families.map((family) => rangesOf(family)[cell]!.limit));
+		const all = Math.hypot(u, (limit * density) / Math.sqrt(3), BALANCE_U * (1 - cell / 1000) * ideal);
+		if (Math.abs(density - ideal) < REACH * all) values[cell]! += BELIEVED * evenly(density, ideal, ideal, all);
+	}
+	return values;
+}
+
+/** The share of a layer in the mass of a layered piece: it makes the whole a little denser than its core. */
+const LAYER = 0.08;
+
+function coreDensity(core: LookAlikeId, density: number, u: number, metal: MainMetal): number {
+	const { low, high } = lookAlike(core);
+	const over = idealDensity([{ share: 1 - LAYER, density: high }, { share: LAYER, density: Math.max(high, metals[metal].density * 0.7) }]);
+	return evenly(density, low, over, u);
+}
+
+/** An honest piece that weighs too light: the shortfall is exponential, up to nearly all of the density. */
+function tooLight(density: number, truth: number, build: Build): number {
+	const { share } = INNOCENT[build];
+	const short = (truth - density) / truth;
+	if (short < 0 || short > 0.95) return 0;
+	return Math.exp(-short / share) / (share * truth * (1 - Math.exp(-0.95 / share)));
+}
+
+/**
+ * A density: what it says of a solid piece by its fineness, and of what may lie under a layer.
+ * formula: (1 − slip) x ((1 − innocent) x solid or core density + innocent x exponential shortfall below it) + slip x flat from 1 to 25, per
+ * g/cm³. Tungsten under gold of 985 ‰ and more is given exactly the densities of the honest piece: whoever builds it trims it to match.
+ * rounding: none.
+ * source: common practice, no source, for the chances (working defaults); densities as in solidDensity and metal/look-alikes.ts.
+ */
+export function densityObservation(
+	density: number,
+	u: number,
+	of: { readonly metal: MainMetal; readonly build: Build; readonly honest: Vector; readonly matched: boolean },
+	balance: Balance | null
+): Observation {
+	const { chance } = INNOCENT[of.build];
+	const solid = solidDensity(density, u, of.metal, balance);
+	const middle = familiesOf(of.metal)[0]!;
+	const ranges = rangesOf(middle);
+	const mix = (as: number, truth: number) =>
+		(1 - SLIP) * ((1 - chance) * as + chance * tooLight(density, truth, of.build)) + SLIP * ANY_DENSITY;
+	const values = solid.map((as, cell) => mix(as, (ranges[cell]!.low + ranges[cell]!.high) / 2));
+	const asHonest = of.honest.reduce((sum, share, cell) => sum + share * values[cell]!, 0);
+	return {
+		solid: values,
+		core: (core) => {
+			if (of.matched && core === 'tungsten') return asHonest;
+			const { low, high } = lookAlike(core);
+			return mix(coreDensity(core, density, u, of.metal), (low + high) / 2);
+		}
+	};
+}
+
+/** A water weighing; null when the piece is too light on its scale to say anything. */
+export function waterObservation(
+	finding: Pick<Water, 'method' | 'air' | 'water' | 'division' | 'temperature'>,
+	of: Parameters<typeof densityObservation>[2],
+	balance: Balance | null
+): Observation | null {
+	const found = densityByWater(finding);
+	if (!found.ok || !found.value.useful) return null;
+	return densityObservation(found.value.density.value, standardUncertainty(found.value.density), of, balance);
+}
