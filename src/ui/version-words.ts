@@ -13,7 +13,8 @@ const KINDS: Readonly<Record<RecordKind, string>> = {
 	prices: 'Price sheet',
 	purchase: 'Purchase',
 	settings: 'Settings',
-	scale: 'Scale'
+	scale: 'Scale',
+	tester: 'Tester'
 };
 
 export function kindName(kind: string): string {
@@ -25,6 +26,7 @@ export function thingName(of: KindBody): string {
 	switch (of.kind) {
 		case 'lot':
 		case 'scale':
+		case 'tester':
 			return of.body.name;
 		case 'piece':
 			return pieceName(of.body.piece);
@@ -53,6 +55,8 @@ export function versionWords(of: KindBody, format: Format): string {
 			return `${of.body.currency} · masses in ${of.body.massUnit}`;
 		case 'scale':
 			return `${of.body.name} · steps of ${format.mass(of.body.division, of.body.unit)}`;
+		case 'tester':
+			return `${of.body.name} · ${of.body.kind === 'acids' ? 'acids' : 'fluorescence'}`;
 	}
 }
 

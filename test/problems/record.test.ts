@@ -21,7 +21,7 @@ describe('problems of records', () => {
 	it('record-newer: a piece of a version to come', () => {
 		expect(decodeBody('piece', 4, frozen('piece').body)).toEqual({
 			ok: false,
-			problem: { kind: 'record-newer', record: 'piece', version: 4, known: 1 }
+			problem: { kind: 'record-newer', record: 'piece', version: 4, known: 2 }
 		});
 	});
 	it('chain-gap: the record before is gone', () => {

@@ -16,9 +16,10 @@ describe('hashes', () => {
 		);
 	});
 	it('of the frozen records are what they were', async () => {
-		for (const kind of ['lot', 'piece', 'prices', 'purchase', 'settings', 'scale'] as const) {
+		for (const kind of ['lot', 'piece', 'prices', 'purchase', 'settings', 'scale', 'tester'] as const) {
 			expect(await hashOf(frozen(kind))).toBe(frozen(kind).hash);
 		}
+		for (const kind of ['piece', 'settings'] as const) expect(await hashOf(frozen(kind, 2))).toBe(frozen(kind, 2).hash);
 	});
 	it('chain', async () => {
 		const { previous: _, hash: __, ...bare } = frozen('lot');

@@ -1,15 +1,17 @@
 import { assert } from '../number/decimal.ts';
 import { fail, type Result } from '../number/result.ts';
+import type { Tester } from '../evidence/tester.ts';
 import type { Scale } from '../mass/scale.ts';
 import type { PriceSheet } from '../price/price-sheet.ts';
 import type { Json } from './json.ts';
 import { lotShape, type LotBody } from './kinds/lot.ts';
-import { pieceShape, type PieceBody } from './kinds/piece.ts';
+import { pieceShape, pieceShape1, type PieceBody } from './kinds/piece.ts';
 import { pricesShape } from './kinds/prices.ts';
 import { purchaseShape, type PurchaseBody } from './kinds/purchase.ts';
 import { scaleShape } from './kinds/scale.ts';
-import { settingsShape, type SettingsBody } from './kinds/settings.ts';
-import { readAs, type Shape, type ShapeProblem } from './shape.ts';
+import { settingsFrom1, settingsShape, settingsShape1, type SettingsBody } from './kinds/settings.ts';
+import { testerShape } from './kinds/tester.ts';
+import { readAs, upgraded, type Reader, type Shape, type ShapeProblem } from './shape.ts';
 
 /** What each kind of record holds. */
 export type Bodies = {
@@ -19,6 +21,7 @@ export type Bodies = {
 	readonly purchase: PurchaseBody;
 	readonly settings: SettingsBody;
 	readonly scale: Scale;
+	readonly tester: Tester;
 };
 
 export type RecordKind = keyof Bodies;
@@ -28,14 +31,17 @@ export type BodyProblem =
 	/** A kind, or a version of a kind, that only a newer app knows. */
 	| { readonly kind: 'record-newer'; readonly record: string; readonly version: number; readonly known: number };
 
-/** The version of each kind that is written today, and its shape. */
-const shapes: { readonly [K in RecordKind]: { readonly version: number; readonly shape: Shape<Bodies[K]> } } = {
-	lot: { version: 1, shape: lotShape },
-	piece: { version: 1, shape: pieceShape },
-	prices: { version: 1, shape: pricesShape },
-	purchase: { version: 1, shape: purchaseShape },
-	settings: { version: 1, shape: settingsShape },
-	scale: { version: 1, shape: scaleShape }
+/** The shape of a kind as it is written today, and how each version before it is read, the first of them first. */
+type Versions<T> = { readonly shape: Shape<T>; readonly older: readonly Reader<T>[] };
+
+const shapes: { readonly [K in RecordKind]: Versions<Bodies[K]> } = {
+	lot: { shape: lotShape, older: [] },
+	piece: { shape: pieceShape, older: [pieceShape1] },
+	prices: { shape: pricesShape, older: [] },
+	purchase: { shape: purchaseShape, older: [] },
+	settings: { shape: settingsShape, older: [upgraded(settingsShape1, settingsFrom1)] },
+	scale: { shape: scaleShape, older: [] },
+	tester: { shape: testerShape, older: [] }
 };
 
 export const recordKinds = Object.keys(shapes) as readonly RecordKind[];
@@ -46,7 +52,7 @@ export function isRecordKind(kind: string): kind is RecordKind {
 
 /** The version in which bodies of a kind are written today. */
 export function versionOf(kind: RecordKind): number {
-	return shapes[kind].version;
+	return shapes[kind].older.length + 1;
 }
 
 /** A body as JSON; what is written reads back the same, or it is our own mistake. */
@@ -58,11 +64,12 @@ export function encodeBody<K extends RecordKind>(kind: K, body: Bodies[K]): Json
 	return json;
 }
 
-/** The body of a record, fully checked. Version 1 is the only one there is; an upgrade of an older one will stand here. */
+/** The body of a record, fully checked. One of an older version is read as that version was, and becomes one of today's. */
 export function decodeBody<K extends RecordKind>(kind: K, version: number, json: Json): Result<Bodies[K], BodyProblem> {
-	const { version: known, shape } = shapes[kind];
+	const { shape, older } = shapes[kind] as Versions<Bodies[K]>;
+	const known = versionOf(kind);
 	if (version > known) return fail({ kind: 'record-newer', record: kind, version, known });
-	return readAs(shape as Shape<Bodies[K]>, json);
+	return readAs(older[version - 1] ?? shape, json);
 }
 
 /** As decodeBody, for a kind read from a file. */

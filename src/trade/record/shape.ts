@@ -13,6 +13,9 @@ export type Shape<T> = {
 	readonly read: (json: Json | undefined, at: string) => T;
 };
 
+/** The half of a shape that reads: all that is left of a version which is not written any more. */
+export type Reader<T> = Pick<Shape<T>, 'read'>;
+
 class Mismatch {
 	constructor(readonly problem: ShapeProblem) {}
 }
@@ -23,7 +26,7 @@ function mismatch(at: string, expected: string, json: Json | undefined): never {
 }
 
 /** Reads a whole body, or says the first place where it is not what it should be. */
-export function readAs<T>(shape: Shape<T>, json: Json): Result<T, ShapeProblem> {
+export function readAs<T>(shape: Reader<T>, json: Json): Result<T, ShapeProblem> {
 	try {
 		return ok(shape.read(json, ''));
 	} catch (thrown) {
@@ -51,6 +54,9 @@ export const name = leaf<string>('a name', (json) => (isText(json) && json !== '
 export const flag = leaf<boolean>('true or false', (json) => (typeof json === 'boolean' ? json : undefined), same);
 export const number = leaf<number>('a number', (json) => (isNumber(json) ? json : undefined), same);
 export const notNegative = leaf<number>('a number of 0 or more', (json) => (isNumber(json) && json >= 0 ? json : undefined), same);
+/** A number from the least to the most, both included. */
+export const within = (least: number, most: number): Shape<number> =>
+	leaf<number>(`a number from ${least} to ${most}`, (json) => (isNumber(json) && json >= least && json <= most ? json : undefined), same);
 export const whole = leaf<number>(
 	'a whole number of 0 or more',
 	(json) => (isNumber(json) && Number.isSafeInteger(json) && json >= 0 ? json : undefined),
@@ -105,11 +111,13 @@ export function nullable<T>(inner: Shape<T>): Shape<T | null> {
 	};
 }
 
-export function list<T>(item: Shape<T>): Shape<readonly T[]> {
+/** A list, of `most` at the most where a body must stay small. */
+export function list<T>(item: Shape<T>, most = Infinity): Shape<readonly T[]> {
 	return {
 		write: (values) => values.map((value) => item.write(value)),
 		read(json, at) {
 			if (json === undefined || json === null || typeof json !== 'object' || !isList(json)) return mismatch(at, 'a list', json);
+			if (json.length > most) return mismatch(at, `a list of at most ${most}`, json);
 			return json.map((each, index) => item.read(each, `${at}[${index}]`));
 		}
 	};
@@ -152,23 +160,37 @@ export function object<T extends object>(fields: Fields<T>, mayLack: readonly (k
 	};
 }
 
-/** Values by key, for keys of a closed set ("fine grams by metal"). */
+/** Values by key, for keys of one shape ("fine grams by metal"). */
 export function byKey<K extends string, T>(key: Shape<K>, inner: Shape<T>): Shape<Partial<Record<K, T>>> {
 	return {
 		write(value) {
-			const made: Record<string, Json> = {};
-			for (const [each, held] of Object.entries(value) as [K, T | undefined][]) {
-				if (held !== undefined) made[each] = inner.write(held);
-			}
-			return made;
+			const held = (Object.entries(value) as [K, T | undefined][]).filter((pair): pair is [K, T] => pair[1] !== undefined);
+			return Object.fromEntries(held.map(([each, of]) => [each, inner.write(of)]));
 		},
+		// made as own fields, whatever they are called
 		read(json, at) {
-			const found = plain(json, at);
-			const made: Partial<Record<K, T>> = {};
-			for (const each of Object.keys(found)) made[key.read(each, at)] = inner.read(found[each], `${at}.${each}`);
-			return made;
+			const found = Object.entries(plain(json, at));
+			return Object.fromEntries(found.map(([each, of]) => [key.read(each, at), inner.read(of, `${at}.${each}`)])) as Partial<Record<K, T>>;
 		}
 	};
+}
+
+/** One of several kinds of thing, told apart by the word in its field `kind`. Each shape reads and writes its whole thing. */
+export function variants<T extends { readonly kind: string }>(shapes: { readonly [K in T['kind']]: Shape<Extract<T, { readonly kind: K }>> }): Shape<T> {
+	const kind = oneOf(Object.keys(shapes) as T['kind'][]);
+	const of = (known: T['kind']) => shapes[known] as unknown as Shape<T>;
+	return {
+		write: (value) => of(value.kind).write(value),
+		read(json, at) {
+			const found = plain(json, at);
+			return of(kind.read(Object.hasOwn(found, 'kind') ? found['kind'] : undefined, at === '' ? 'kind' : `${at}.kind`)).read(json, at);
+		}
+	};
+}
+
+/** A version that is not written any more, read as what is written today. */
+export function upgraded<Old, T>(old: Reader<Old>, upgrade: (found: Old) => T): Reader<T> {
+	return { read: (json, at) => upgrade(old.read(json, at)) };
 }
 
 /** A shape with one more condition on the value that was read; `refuses` says what was expected instead, or null. */

@@ -10,6 +10,7 @@ import { exact, ratio } from '../../../src/trade/number/exact.ts';
 import type { Piece } from '../../../src/trade/piece/piece.ts';
 import type { PriceSheet } from '../../../src/trade/price/price-sheet.ts';
 import { encodeBody, type Bodies, type RecordKind } from '../../../src/trade/record/kind.ts';
+import { settingsShape1, type Settings1 } from '../../../src/trade/record/kinds/settings.ts';
 import { canonicalText } from '../../../src/trade/record/record.ts';
 
 const d = decimal;
@@ -48,8 +49,8 @@ const ring: Piece = {
 	photos: ['9f86d081884c7d659a2feaa0c55ad015a3bf4f1b2b0b822cd15d6c15b0f00a08']
 };
 
-/** One body of each kind, with every field in use. */
-export const bodies: Bodies = {
+/** One body of each kind as its version 1 was, with every field in use. */
+export const bodies: Omit<Bodies, 'settings'> & { readonly settings: Settings1 } = {
 	lot: { name: 'Tuesday, second seller', note: 'box of odds', state: 'open', purchase: null, sheet: 'sheet-1', openedAt: at, ask: '1.250' },
 	piece: { lot: 'lot-1', order: 1.5, piece: ring },
 	prices,
@@ -85,7 +86,19 @@ export const bodies: Bodies = {
 		losses: { worn: { metalLoss: { low: d('0.004'), high: d('0.012') } } },
 		language: 'de-AT'
 	},
-	scale: { id: 'scale-1', name: 'Counter', unit: 'g', division: d('0.01'), verification: d('0.1'), accuracyClass: 'II', checkedOn: '2026-09-01' }
+	scale: { id: 'scale-1', name: 'Counter', unit: 'g', division: d('0.01'), verification: d('0.1'), accuracyClass: 'II', checkedOn: '2026-09-01' },
+	tester: {
+		id: 'tester-1',
+		name: 'Back room',
+		kind: 'fluorescence',
+		rows: [
+			{ metal: 'Au', colour: 'any', perMille: 585, u: 14 },
+			{ metal: 'Au', colour: 'white', perMille: 750, u: 12.5 }
+		],
+		bias: 2,
+		gross: 0.03,
+		checkedOn: '2026-09-01'
+	}
 };
 
 export const subjects: Readonly<Record<RecordKind, string>> = {
@@ -94,7 +107,8 @@ export const subjects: Readonly<Record<RecordKind, string>> = {
 	prices: 'sheet-1',
 	purchase: 'purchase-1',
 	settings: 'settings',
-	scale: 'scale-1'
+	scale: 'scale-1',
+	tester: 'tester-1'
 };
 
 if (process.argv[1] === fileURLToPath(import.meta.url)) {
@@ -109,7 +123,7 @@ if (process.argv[1] === fileURLToPath(import.meta.url)) {
 			settles: kind === 'purchase' ? ['01KOTHER'] : [],
 			at,
 			device: 'device-1',
-			body: encodeBody(kind, bodies[kind] as never),
+			body: kind === 'settings' ? settingsShape1.write(bodies.settings) : encodeBody(kind, bodies[kind] as never),
 			previous
 		};
 		const hash: string = createHash('sha256').update(canonicalText(record)).digest('hex');

@@ -3,12 +3,14 @@ import { checkBody, decodeBody, encodeBody, isRecordKind, recordKinds, versionOf
 import { frozen, frozenBody } from './kinds/frozen.ts';
 
 describe('kinds of record', () => {
-	it('all have a frozen file of their version', () => {
-		expect(recordKinds).toEqual(['lot', 'piece', 'prices', 'purchase', 'settings', 'scale']);
+	it('all have a frozen file of each of their versions', () => {
+		expect(recordKinds).toEqual(['lot', 'piece', 'prices', 'purchase', 'settings', 'scale', 'tester']);
 		for (const kind of recordKinds) {
-			const { version, body } = frozen(kind);
-			expect(version).toBe(versionOf(kind));
-			expect(checkBody(kind, version, body)).toBeNull();
+			for (let each = 1; each <= versionOf(kind); each += 1) {
+				const { version, body } = frozen(kind, each);
+				expect([kind, version]).toEqual([kind, each]);
+				expect(checkBody(kind, version, body)).toBeNull();
+			}
 		}
 	});
 	it('do not take inherited names', () => {
@@ -25,7 +27,7 @@ describe('kinds of record', () => {
 		for (const kind of recordKinds) expect(checkBody(kind, 1, null)).toBeNull();
 	});
 	it('never write what they could not read', () => {
-		const { piece, ...rest } = frozenBody('piece');
+		const { piece, ...rest } = frozenBody('piece', 2);
 		expect(() => encodeBody('piece', { ...rest, piece: { ...piece, count: 0 } })).toThrow('a piece that does not read back');
 	});
 });

@@ -14,7 +14,10 @@ import {
 	readAs,
 	refined,
 	text,
+	upgraded,
+	variants,
 	whole,
+	within,
 	type Shape
 } from '../../../src/trade/record/shape.ts';
 
@@ -65,6 +68,34 @@ describe('shapes', () => {
 		const even = refined(whole, (value) => (value % 2 === 0 ? null : 'an even number'));
 		expect(readAs(even, 4)).toEqual({ ok: true, value: 4 });
 		expect(problem(even, 3)).toMatchObject({ expected: 'an even number', found: '3' });
+	});
+	it('tell several kinds of thing apart by their kind', () => {
+		type Round = { readonly kind: 'round'; readonly across: number };
+		type Square = { readonly kind: 'square'; readonly side: number };
+		const either = variants<Round | Square>({
+			round: object<Round>({ kind: oneOf(['round']), across: whole }),
+			square: object<Square>({ kind: oneOf(['square']), side: whole })
+		});
+		for (const value of [{ kind: 'round', across: 3 }, { kind: 'square', side: 4 }] as const) {
+			expect(readAs(list(either), [value])).toEqual({ ok: true, value: [value] });
+			expect(either.write(value)).toEqual(value);
+		}
+		expect(problem(list(either), [{ kind: 'round', side: 4 }])).toMatchObject({ at: '[0].across', found: 'nothing' });
+		expect(problem(either, { kind: 'oval', across: 3 })).toMatchObject({ at: 'kind', expected: 'one of round, square', found: '"oval"' });
+		expect(problem(either, { across: 3 })).toMatchObject({ at: 'kind', found: 'nothing' });
+		for (const other of [null, 7, 'round', [], ['round']]) expect(problem(either, other)).toMatchObject({ expected: 'named fields' });
+		expect(problem(either, { kind: 'toString' })).toMatchObject({ at: 'kind' });
+	});
+	it('read an older version as one of today', () => {
+		const today = upgraded(thing, ({ what }) => ({ what, size: 0 }));
+		expect(readAs(today, { what: 'ring' })).toEqual({ ok: true, value: { what: 'ring', size: 0 } });
+		expect(readAs(today, { what: 7 })).toMatchObject({ ok: false, problem: { at: 'what' } });
+	});
+	it('keep numbers and lists within their limits', () => {
+		expect(readAs(within(0, 1), 1).ok && readAs(within(0, 1), 0).ok).toBe(true);
+		for (const found of [-0.001, 1.001, '0.5', null]) expect(problem(within(0, 1), found)).toMatchObject({ expected: 'a number from 0 to 1' });
+		expect(readAs(list(whole, 2), [1, 2]).ok).toBe(true);
+		expect(problem(list(whole, 2), [1, 2, 3])).toMatchObject({ at: '', expected: 'a list of at most 2' });
 	});
 	it('cut what they show', () => {
 		expect(problem(whole, 'x'.repeat(500))?.found).toHaveLength(60);

@@ -1,3 +1,7 @@
+import { hypotheses, type HypothesisId } from '../../evidence/belief.ts';
+import { findingKinds } from '../../evidence/finding.ts';
+import { origins, type Origin } from '../../evidence/origin.ts';
+import type { TestCosts } from '../../evidence/test-costs.ts';
 import { lossRange, type LossOverrides, type LossPart, type Losses, type Range } from '../../melt/losses.ts';
 import type { MassUnitId } from '../../mass/units.ts';
 import { decimal, ZERO, type Decimal } from '../../number/decimal.ts';
@@ -7,8 +11,10 @@ import { lossClasses } from '../../piece/loss-class.ts';
 import type { Volatility } from '../../price/age.ts';
 import type { CurrencyCode } from '../../price/currency.ts';
 import { tiers, type Tier } from '../../price/offer.ts';
-import { byKey, decimalText, list, name, notNegative, nullable, object, oneOf, positiveText, refined, text, whole } from '../shape.ts';
+import { byKey, decimalText, list, name, notNegative, nullable, object, oneOf, positiveText, refined, text, whole, within } from '../shape.ts';
 import { currency, massUnit, metal } from './shared.ts';
+
+export type PriorOverrides = Partial<Readonly<Record<Origin, Readonly<Record<HypothesisId, number>>>>>;
 
 /** The buyer's own settings, one subject per book ('settings'). What is not set here has its default in its own folder. */
 export type SettingsBody = {
@@ -25,12 +31,18 @@ export type SettingsBody = {
 	readonly days: number;
 	readonly spreads: Partial<Record<SpreadId, Spread>>;
 	readonly losses: LossOverrides;
+	/** The chance that the bulk of a piece is at least what it is taken at after tests. */
+	readonly prudence: number;
+	/** What a test costs in time and damage, in the book's currency, where the buyer has said so. */
+	readonly testCosts: TestCosts;
+	/** The odds before any test, where the buyer has said so; each set sums to one. */
+	readonly priors: PriorOverrides;
 	/** Language of numbers and dates; null: the device's. */
 	readonly language: string | null;
 };
 
 /**
- * What counts until the buyer has said otherwise. The share paid and the days until the sale are working defaults:
+ * What counts until the buyer has said otherwise. The share paid, the days until the sale and the prudence are working defaults:
  * common practice, no source, editable and shown as such.
  */
 export function defaultSettings(): SettingsBody {
@@ -45,9 +57,15 @@ export function defaultSettings(): SettingsBody {
 		days: 14,
 		spreads: {},
 		losses: {},
+		prudence: 0.8,
+		testCosts: {},
+		priors: {},
 		language: null
 	};
 }
+
+/** How sure a buyer can ask to be: less than an even chance is no prudence, and nobody is quite sure. */
+export const PRUDENCE = { least: 0.5, most: 0.99 } as const;
 
 const range = (part: LossPart) =>
 	refined(object<Range>({ low: decimalText, high: decimalText }), ({ low, high }) => {
@@ -55,7 +73,13 @@ const range = (part: LossPart) =>
 		return checked.ok ? null : `a range of losses (${checked.problem.kind})`;
 	});
 
-export const settingsShape = object<SettingsBody>({
+const odds = refined(
+	object<Record<HypothesisId, number>>({ honest: within(0, 1), under: within(0, 1), other: within(0, 1), layered: within(0, 1) }),
+	(found) => (Math.abs(hypotheses.reduce((sum, id) => sum + found[id], 0) - 1) < 1e-9 ? null : 'odds that add up to 1')
+);
+
+/** What every version of the settings holds. */
+const fields = {
 	currency,
 	mark: oneOf<DecimalMark>(['dot', 'comma']),
 	massUnit,
@@ -79,4 +103,21 @@ export const settingsShape = object<SettingsBody>({
 		)
 	),
 	language: nullable(text)
+};
+
+export const settingsShape = object<SettingsBody>({
+	...fields,
+	prudence: within(PRUDENCE.least, PRUDENCE.most),
+	testCosts: byKey(oneOf(findingKinds), refined(decimalText, (cost) => (cost.lt(0) ? 'a cost of 0 or more' : null))),
+	priors: byKey(oneOf(origins), odds)
 });
+
+/** Version 1 knew no tests. */
+export type Settings1 = Omit<SettingsBody, 'prudence' | 'testCosts' | 'priors'>;
+
+export const settingsShape1 = object<Settings1>(fields);
+
+export function settingsFrom1(found: Settings1): SettingsBody {
+	const { prudence, testCosts, priors } = defaultSettings();
+	return { ...found, prudence, testCosts, priors };
+}

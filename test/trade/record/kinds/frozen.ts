@@ -2,12 +2,12 @@ import { createHash } from 'node:crypto';
 import { readFileSync } from 'node:fs';
 import { expect } from 'vitest';
 import { canonicalJson, type Json } from '../../../../src/trade/record/json.ts';
-import { decodeBody, encodeBody, type Bodies, type RecordKind } from '../../../../src/trade/record/kind.ts';
+import { decodeBody, encodeBody, versionOf, type Bodies, type RecordKind } from '../../../../src/trade/record/kind.ts';
 import { canonicalText, readRecord, type StoredRecord } from '../../../../src/trade/record/record.ts';
 
-/** A record as version 1 wrote it, from its frozen file; its hash is recomputed by another route than the app's. */
-export function frozen(kind: RecordKind): StoredRecord {
-	const file = new URL(`../../../records/v1/${kind}.json`, import.meta.url);
+/** A record as a version wrote it, from its frozen file; its hash is recomputed by another route than the app's. */
+export function frozen(kind: RecordKind, version = 1): StoredRecord {
+	const file = new URL(`../../../records/v${version}/${kind}.json`, import.meta.url);
 	const read = readRecord(JSON.parse(readFileSync(file, 'utf8')));
 	if (!read.ok) throw new Error(`${kind}: ${JSON.stringify(read.problem)}`);
 	const record = read.value;
@@ -16,11 +16,21 @@ export function frozen(kind: RecordKind): StoredRecord {
 }
 
 /** The body of a frozen record by today's code, which must write it again to the last character. */
-export function frozenBody<K extends RecordKind>(kind: K): Bodies[K] {
-	const { version, body } = frozen(kind);
+export function frozenBody<K extends RecordKind>(kind: K, of = 1): Bodies[K] {
+	const { version, body } = frozen(kind, of);
 	const read = decodeBody(kind, version, body);
 	if (!read.ok) throw new Error(`${kind}: ${JSON.stringify(read.problem)}`);
 	expect(canonicalJson(encodeBody(kind, read.value))).toBe(canonicalJson(body));
+	return read.value;
+}
+
+/** The body of a frozen record of an older version, as today's code upgrades it: what it then writes reads back the same. */
+export function upgradedBody<K extends RecordKind>(kind: K, of = 1): Bodies[K] {
+	const { version, body } = frozen(kind, of);
+	expect(version).toBeLessThan(versionOf(kind));
+	const read = decodeBody(kind, version, body);
+	if (!read.ok) throw new Error(`${kind}: ${JSON.stringify(read.problem)}`);
+	expect(decodeBody(kind, versionOf(kind), encodeBody(kind, read.value))).toEqual(read);
 	return read.value;
 }
 
@@ -46,19 +56,19 @@ export function placesIn(value: Json, path: readonly (string | number)[] = []): 
 /** Something that no field takes. */
 const WRONG: Json = [{ nonsense: -1.5 }];
 
-/** At every place of the frozen body a value of the wrong kind is refused, and the problem says where. */
-export function expectEveryFieldChecked(kind: RecordKind): void {
-	const { body } = frozen(kind);
+/** At every place of the frozen body a value of the wrong kind is refused, and the problem says where; a field too many as well, but in `named`. */
+export function expectEveryFieldChecked(kind: RecordKind, version = 1, named?: string): void {
+	const { body } = frozen(kind, version);
 	const places = placesIn(body);
 	expect(places.length).toBeGreaterThan(4);
 	for (const place of places) {
-		const read = decodeBody(kind, 1, changedAt(body, place, WRONG));
+		const read = decodeBody(kind, version, changedAt(body, place, WRONG));
 		expect(read.ok, place.join('.')).toBe(false);
 		if (read.ok || read.problem.kind !== 'record-body') throw new Error(`${place.join('.')} was not checked`);
 		expect(read.problem.at.startsWith(String(place[0])), `${place.join('.')}: ${read.problem.at}`).toBe(true);
 	}
-	for (const place of places.filter((each) => typeof each.at(-1) === 'string')) {
+	for (const place of places.filter((each) => typeof each.at(-1) === 'string' && each.slice(0, -1).join('.') !== named)) {
 		const added = changedAt(body, [...place.slice(0, -1), 'unheardOf'], 1);
-		expect(decodeBody(kind, 1, added).ok, `${place.join('.')} and a stranger`).toBe(false);
+		expect(decodeBody(kind, version, added).ok, `${place.join('.')} and a stranger`).toBe(false);
 	}
 }
