@@ -4,6 +4,7 @@ import type { AppendOptions, Change } from '$storage/append.ts';
 import type { StorageProblem } from '$storage/problem.ts';
 import { assert } from '$trade/number/decimal.ts';
 import type { Result } from '$trade/number/result.ts';
+import type { Tester } from '$trade/evidence/tester.ts';
 import type { Scale } from '$trade/mass/scale.ts';
 import type { PriceSheet } from '$trade/price/price-sheet.ts';
 import { defaultSettings, type SettingsBody } from '$trade/record/kinds/settings.ts';
@@ -31,6 +32,7 @@ export class Shop {
 	settingsRecord = $state.raw<string | null>(null);
 	sheet = $state.raw<Sheet | null>(null);
 	scales = $state.raw<readonly Scale[]>([]);
+	testers = $state.raw<readonly Tester[]>([]);
 	/** The moment that ages are counted from. */
 	now = $state(Date.now());
 	/** Raised after every committed act, here or in another tab: what was read is read again. */
@@ -82,6 +84,9 @@ export class Shop {
 		}
 		if (wants('scale')) {
 			this.scales = (await this.book.scales()).flatMap(({ body }) => (body === null ? [] : [body]));
+		}
+		if (wants('tester')) {
+			this.testers = (await this.book.testers()).flatMap(({ body }) => (body === null ? [] : [body]));
 		}
 		if (wants('purchase') || wants('backup')) this.onlyHere = (await this.book.counts()).purchasesOnlyHere;
 	}

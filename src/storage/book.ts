@@ -114,6 +114,7 @@ function bookOf(session: Session) {
 		sheets: (limit: number) => read.sheets(session, limit),
 		settings: () => read.settings(session),
 		scales: () => read.scales(session),
+		testers: () => read.testers(session),
 		openLots: () => read.lotsIn(session, 'open'),
 		setAsideLots: () => read.lotsIn(session, 'set-aside'),
 		lot: (subject: string) => read.lot(session, subject),

@@ -59,6 +59,10 @@ export async function scales(session: Session): Promise<Entry<'scale'>[]> {
 	return present(entries(session, 'scale', await session.use((db) => shelf(db, 'scales').toArray())));
 }
 
+export async function testers(session: Session): Promise<Entry<'tester'>[]> {
+	return present(entries(session, 'tester', await session.use((db) => shelf(db, 'testers').toArray())));
+}
+
 export async function lotsIn(session: Session, state: Bodies['lot']['state']): Promise<Entry<'lot'>[]> {
 	return present(entries(session, 'lot', await session.use((db) => shelf(db, `lots:${state}`).toArray())));
 }

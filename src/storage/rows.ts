@@ -68,6 +68,8 @@ function placeOf(kind: string, body: Json | null): { shelf?: string; order?: num
 			return { shelf: 'purchases', order: at('boughtAt') };
 		case 'scale':
 			return { shelf: 'scales', order: 0 };
+		case 'tester':
+			return { shelf: 'testers', order: 0 };
 		default:
 			return {};
 	}
