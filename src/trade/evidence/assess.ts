@@ -3,12 +3,12 @@ import type { HypothesisId } from './belief.ts';
 import { coinObservation } from './coin-weight.ts';
 import { coreObservation } from './core-test.ts';
 import { coresOf, isFineGold, strata, type CoreChance } from './cores.ts';
-import { enrichmentOf } from './enrichment.ts';
+import { enrichmentOf, type Enrichment } from './enrichment.ts';
 import type { Finding } from './finding.ts';
 import { assayObservation } from './fire-assay.ts';
 import { balanceOf, fluorescenceObservation, type Balance } from './fluorescence.ts';
 import { CELLS, flat, momentsOf, quantileOf, type Vector } from './grid.ts';
-import { joint } from './joint.ts';
+import { joint, throughSurface } from './joint.ts';
 import { magnetObservation } from './magnet.ts';
 import type { Observation } from './observation.ts';
 import { priorOf, type Prior, type Priors } from './priors.ts';
@@ -23,16 +23,18 @@ export type Start = {
 	readonly cores: readonly CoreChance[];
 	/** What the surface of a layered piece is made to look like: that of the honest piece, or of any standard where there is no mark. */
 	readonly imitated: Vector;
+	readonly enrichment: Enrichment;
 };
 
 export function startOf(subject: Subject, priors: Priors = {}): Start {
 	const prior = priorOf(subject, priors);
-	return { subject, prior, cores: coresOf(subject), imitated: surfaceOf(prior.bulk[subject.claimed === null ? 'other' : 'honest'], subject) };
+	const enrichment = enrichmentOf(subject);
+	const shown = prior.bulk[subject.claimed === null ? 'other' : 'honest'];
+	return { subject, prior, cores: coresOf(subject), imitated: surfaceOf(shown, enrichment), enrichment };
 }
 
 /** The surface of a solid piece: its bulk, each part moved by the enrichment. */
-function surfaceOf(bulk: Vector, subject: Subject): Vector {
-	const { first, chances } = enrichmentOf(subject);
+function surfaceOf(bulk: Vector, { first, chances }: Enrichment): Vector {
 	const surface = new Float64Array(CELLS);
 	for (let cell = 0; cell < CELLS; cell += 1) {
 		const share = bulk[cell]!;
@@ -54,7 +56,7 @@ export function observe(start: Start, finding: Finding, balance: Balance | null)
 		case 'fluorescence':
 			return fluorescenceObservation(finding, metal);
 		case 'water':
-			return waterObservation(finding, { metal, build, honest: start.prior.bulk.honest, matched: isFineGold(start.subject) }, balance);
+			return waterObservation(finding, { metal, build, matched: isFineGold(start.subject) }, balance);
 		case 'magnet':
 			return magnetObservation(finding.pull, metal);
 		case 'core':
@@ -80,6 +82,12 @@ export type CoreOdds = {
 	/** How much likelier the findings are over this core than for an honest piece; 1 when nothing that was done can tell them apart. */
 	readonly against: number;
 };
+
+function dot(a: Vector, b: Vector, c: Vector | null = null): number {
+	let sum = 0;
+	for (let cell = 0; cell < CELLS; cell += 1) sum += a[cell]! * b[cell]! * (c === null ? 1 : c[cell]!);
+	return sum;
+}
 
 /** What is believed after the findings. Fineness in parts per thousand. */
 export type Assessment = {
@@ -125,59 +133,77 @@ class Product {
 /** Which streaks see the bulk, at each thickness of the layer; the others see the surface. */
 const goesThrough = (how: 'rub' | 'notch', layer: 'thin' | 'notch' | 'thick') => layer === 'thin' || (layer === 'notch' && how === 'notch');
 
+/** What each finding says of the outside of a layered piece: its surface, and the materials that may lie under it. */
+type Outside = {
+	readonly surface: Product;
+	readonly bulk: Product;
+	readonly logCores: number[];
+	/** What a core that cannot be told from the honest piece shares with it. */
+	readonly asSolid: Product;
+	readonly matched: boolean[];
+};
+
+function add(into: Outside, start: Start, { surface, bulk, solid, core }: Observation): void {
+	into.surface.times(surface);
+	into.bulk.times(bulk);
+	if (core === undefined) return;
+	for (const [index, each] of start.cores.entries()) {
+		const likelihood = core(each.core);
+		if (likelihood !== 'as solid') into.logCores[index]! += Math.log(likelihood);
+		else if (!into.matched[index]) into.matched[index] = true;
+	}
+	if (start.cores.some((each) => core(each.core) === 'as solid')) into.asSolid.times(solid);
+}
+
 /**
  * The joint estimate of a piece from observations, in any order.
  * formula: likelihoods multiply; a rub on a solid piece sees the surface and a notch the bulk; on a layered one each streak sees the bulk where
- * it goes through the layer and the surface elsewhere, the same layer for all of them; then Bayes' rule on the two layers (joint).
+ * it goes through the layer and the surface elsewhere, the same layer for all of them; then Bayes' rule on the two layers (joint). The surface
+ * of a layered piece is that of an honest one; a core that is trimmed to match has its density too.
  * rounding: none.
  * source: Bayes' rule; the chances of a streak going through (rub 0.4, notch 0.9) are working defaults, common practice, no source.
  */
 export function assessObservations(start: Start, observations: readonly (Observation | null)[]): Assessment {
-	const { subject, prior, cores, imitated } = start;
+	const { subject, prior, cores, imitated, enrichment } = start;
 	const surface = new Product();
 	const bulk = new Product();
-	const shared = { surface: new Product(), bulk: new Product() };
-	const logCores = cores.map(() => 0);
+	const layer: Outside = {
+		surface: new Product(), bulk: new Product(), logCores: cores.map(() => 0), asSolid: new Product(), matched: cores.map(() => false)
+	};
 	const streaks: NonNullable<Observation['streak']>[] = [];
 	for (const observation of observations) {
 		if (observation === null) continue;
 		surface.times(observation.surface);
-		shared.surface.times(observation.surface);
 		bulk.times(observation.bulk);
-		shared.bulk.times(observation.bulk);
 		bulk.times(observation.solid);
-		const { core, streak } = observation;
-		if (core !== undefined) cores.forEach((each, index) => (logCores[index]! += Math.log(core(each.core))));
+		add(layer, start, observation);
+		const { streak } = observation;
 		if (streak === undefined) continue;
 		(streak.how === 'rub' ? surface : bulk).times(streak.values);
 		streaks.push(streak);
 	}
 	const layers = strata.map(({ id, chance }) => {
-		const product = { surface: shared.surface.copy(), bulk: shared.bulk.copy() };
-		for (const { how, values } of streaks) (goesThrough(how, id) ? product.bulk : product.surface).times(values);
-		return { chance, ...product, log: product.surface.log + product.bulk.log };
+		const seen = { surface: layer.surface.copy(), bulk: layer.bulk.copy() };
+		for (const { how, values } of streaks) (goesThrough(how, id) ? seen.bulk : seen.surface).times(values);
+		const shown = dot(imitated, seen.surface.values);
+		const matched = layer.matched.includes(true) ? dot(prior.bulk.honest, throughSurface(seen.surface.values, enrichment), layer.asSolid.values) : 0;
+		const outside = cores.map((_, index) => (layer.matched[index] ? Math.log(matched) + layer.asSolid.log : Math.log(shown)) + layer.logCores[index]!);
+		return { chance, bulk: seen.bulk.values, log: seen.surface.log + seen.bulk.log, outside };
 	});
 	// one common scale for solid and layered: the largest logarithm of all
 	const solidLog = surface.log + bulk.log;
-	const coreLog = Math.max(...logCores);
-	const layeredLog = Math.max(...layers.map(({ log }) => log)) + coreLog;
-	const scale = Math.max(solidLog, layeredLog);
+	const scale = Math.max(solidLog, ...layers.flatMap(({ log, outside }) => outside.map((each) => each + log)));
 	const solidFactor = Math.exp(solidLog - scale);
 	const found = joint({
 		solids: (['honest', 'under', 'other'] as const).map((id) => ({ id, odds: prior.odds[id] * solidFactor, bulk: prior.bulk[id] })),
-		enrichment: enrichmentOf(subject),
+		enrichment,
 		surface: surface.values,
 		bulk: bulk.values,
 		layered: {
 			odds: prior.odds.layered,
 			bulk: prior.bulk.layered,
-			surface: imitated,
-			strata: layers.map((layer) => ({
-				chance: layer.chance * Math.exp(layer.log + coreLog - scale),
-				surface: layer.surface.values,
-				bulk: layer.bulk.values
-			})),
-			cores: cores.map(({ chance }, index) => ({ chance, likelihood: Math.exp(logCores[index]! - coreLog) }))
+			strata: layers.map(({ chance, bulk: seen, log, outside }) => ({ chance, bulk: seen, outside: outside.map((each) => Math.exp(each + log - scale)) })),
+			cores: cores.map(({ chance }) => chance)
 		}
 	});
 	const { mean, sd } = momentsOf(found.bulk);

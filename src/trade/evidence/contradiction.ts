@@ -85,7 +85,7 @@ export function contradictions(start: Start, findings: readonly Finding[]): Cont
 		if (observation === null || says === null) return;
 		const { surface, bulk, solid, streak, core } = observation;
 		if (says.by === 'magnet' || says.by === 'coin') {
-			const over = Math.max(...start.cores.map((each) => core?.(each.core) ?? 0));
+			const over = Math.max(...start.cores.map((each) => Number(core?.(each.core) ?? 0)));
 			if (mark !== null && over > AGAINST_SOLID * (solid?.[0] ?? 1)) found.push({ first: mark, second: says });
 			return;
 		}

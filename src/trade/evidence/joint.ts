@@ -6,8 +6,14 @@ import type { Vector } from './grid.ts';
 /** One alloy all through: its odds and the distribution of its bulk. */
 export type SolidCase = { readonly id: Exclude<HypothesisId, 'layered'>; readonly odds: number; readonly bulk: Vector };
 
-/** How thick the layer is decides which streaks go through it; so each thickness sees its own likelihoods. */
-export type Stratum = { readonly chance: number; readonly surface: Vector; readonly bulk: Vector };
+/** How thick the layer is decides which streaks go through it; so each thickness has its own likelihoods. */
+export type Stratum = {
+	readonly chance: number;
+	/** Likelihood of what was seen of the bulk through such a layer, by its fineness. */
+	readonly bulk: Vector;
+	/** Likelihood of all the rest, for each material under the layer. */
+	readonly outside: readonly number[];
+};
 
 export type Cases = {
 	readonly solids: readonly SolidCase[];
@@ -18,10 +24,9 @@ export type Cases = {
 	readonly layered: {
 		readonly odds: number;
 		readonly bulk: Vector;
-		readonly surface: Vector;
 		readonly strata: readonly Stratum[];
-		/** Chance of each material under the layer, and how likely the findings were over it. */
-		readonly cores: readonly { readonly chance: number; readonly likelihood: number }[];
+		/** Chance of each material under the layer. */
+		readonly cores: readonly number[];
 	};
 };
 
@@ -59,9 +64,9 @@ export function throughSurface(surface: Vector, { first, chances }: Enrichment):
 /**
  * Bayes' rule on two layers: what the bulk is, what lies on it, and which hypothesis holds.
  * formula: solid: weight of a bulk = odds x its chance x likelihood of the bulk x likelihood of the surface through the enrichment;
- * layered: odds x sum over thicknesses of (chance x surface chances · likelihoods x bulk chances · likelihoods) x sum over cores of
- * (chance x likelihood); each divided by the sum of all. The same as the double sum over all pairs of surface and bulk, because the surface
- * depends on the bulk of a solid piece only through the enrichment, and of a layered piece not at all.
+ * layered: odds x sum over thicknesses and materials of (chances x likelihood of the outside) x chance of the bulk x its likelihood; each
+ * divided by the sum of all. The same as the double sum over all pairs of surface and bulk, because the surface depends on the bulk of a solid
+ * piece only through the enrichment, and of a layered piece not at all.
  * rounding: none.
  * source: Bayes' rule; JCGM 101:2008, 6.1 for the states of knowledge it combines.
  */
@@ -81,16 +86,18 @@ export function joint(cases: Cases): Joint {
 		sums[id] += sum;
 	}
 	const { layered } = cases;
-	const overCores = layered.cores.reduce((sum, { chance, likelihood }) => sum + chance * likelihood, 0);
+	const cores = layered.cores.map(() => 0);
 	for (const stratum of layered.strata) {
-		let surface = 0;
-		for (let cell = 0; cell < cells; cell += 1) surface += layered.surface[cell]! * stratum.surface[cell]!;
-		const outside = layered.odds * stratum.chance * surface * overCores;
-		for (let cell = 0; cell < cells; cell += 1) {
-			const part = outside * layered.bulk[cell]! * stratum.bulk[cell]!;
-			weight[cell]! += part;
-			sums.layered += part;
+		let inside = 0;
+		for (let cell = 0; cell < cells; cell += 1) inside += layered.bulk[cell]! * stratum.bulk[cell]!;
+		let outside = 0;
+		for (const [index, chance] of layered.cores.entries()) {
+			const part = layered.odds * stratum.chance * chance * stratum.outside[index]!;
+			outside += part;
+			cores[index]! += part * inside;
 		}
+		for (let cell = 0; cell < cells; cell += 1) weight[cell]! += outside * layered.bulk[cell]! * stratum.bulk[cell]!;
+		sums.layered += outside * inside;
 	}
 	const evidence = hypotheses.reduce((sum, id) => sum + sums[id], 0);
 	assert(evidence > 0 && Number.isFinite(evidence), 'the findings leave nothing possible');
@@ -98,6 +105,6 @@ export function joint(cases: Cases): Joint {
 		evidence,
 		odds: { honest: sums.honest / evidence, under: sums.under / evidence, other: sums.other / evidence, layered: sums.layered / evidence },
 		bulk: weight.map((value) => value * (1 / evidence)),
-		cores: layered.cores.map(({ chance, likelihood }) => (overCores === 0 ? 0 : (sums.layered / evidence) * ((chance * likelihood) / overCores)))
+		cores: cores.map((part) => part / evidence)
 	};
 }

@@ -55,7 +55,7 @@ function outcomesOf(start: Start, now: Assessment, test: Possible, findings: rea
 			return (['none', 'weak', 'strong'] as const).map((pull: Pull) => ({ observation: magnetObservation(pull, subject.metal), width: 1 }));
 		case 'water': {
 			const balance = balanceOf(findings.filter((finding) => finding.kind === 'fluorescence'), subject.metal);
-			const of = { metal: subject.metal, build: subject.build, honest: start.prior.bulk.honest, matched: isFineGold(subject) };
+			const of = { metal: subject.metal, build: subject.build, matched: isFineGold(subject) };
 			// wider than the reading's own doubt, so that no result falls between two of the grid
 			const u = Math.max(test.u, 0.15);
 			return DENSITIES.map((density) => ({ observation: densityObservation(density, u, of, balance), width: 18 / DENSITIES.length }));

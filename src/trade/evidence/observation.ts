@@ -12,8 +12,8 @@ export type Observation = {
 	readonly bulk?: Vector;
 	/** By the fineness of the bulk of a piece that is one alloy all through. */
 	readonly solid?: Vector;
-	/** By the material under a layer. */
-	readonly core?: (core: LookAlikeId) => number;
+	/** By the material under a layer; 'as solid' where it cannot be told from the honest piece, and is as likely as that. */
+	readonly core?: (core: LookAlikeId) => number | 'as solid';
 	/** A streak: of the surface, or of what lies under it when the streak goes through the layer. */
 	readonly streak?: { readonly how: 'rub' | 'notch'; readonly values: Vector };
 };

@@ -5,22 +5,24 @@ import { CELLS } from './grid.ts';
 import type { Observation } from './observation.ts';
 
 /**
- * A streak between two acids.
- * formula: chance to withstand the one acid Φ((fineness − its fineness) / edge) x chance to be attacked by the other
- * Φ((its fineness − fineness) / edge), edge = the uncertainty of the acids; (1 − gross) of it + gross / 4, the four outcomes of two
- * acids being equally likely when it was misread.
+ * A streak beside two acids, or one.
+ * formula: the eye places the streak at fineness ± edge; an acid is made so that its own standard just withstands it, so it attacks below its
+ * fineness − edge: chance to lie between the acid that was withstood and the one that attacked = Φ((attacking − edge − fineness) / edge) −
+ * Φ((withstood − edge − fineness) / edge); with one acid alone the half that it leaves; (1 − gross) of it + gross
+ * shared evenly by the outcomes there are (three with two acids, two with one). Parts per thousand.
  * rounding: none.
- * source: the touchstone resolves 10 to 20 parts per thousand (Corti, Gold Technology, on assay of gold jewellery); edge editable.
+ * source: the touchstone resolves 10 to 20 parts per thousand (encyclopaedia article on the touchstone); edge and gross are working defaults.
  */
 export function touchObservation(finding: Pick<Touch, 'how' | 'holds' | 'attackedBy' | 'u' | 'gross'>): Observation {
 	const { how, u, gross } = finding;
-	const holds = finding.holds === null ? null : perMilleNumber(finding.holds);
-	const attackedBy = finding.attackedBy === null ? null : perMilleNumber(finding.attackedBy);
+	const holds = finding.holds === null ? null : perMilleNumber(finding.holds) - u;
+	const attackedBy = finding.attackedBy === null ? null : perMilleNumber(finding.attackedBy) - u;
+	const misread = gross / (holds === null || attackedBy === null ? 2 : 3);
 	const values = new Float64Array(CELLS);
 	for (let cell = 0; cell < CELLS; cell += 1) {
-		const withstands = holds === null ? 1 : normalCdf((cell - holds) / u);
-		const attacked = attackedBy === null ? 1 : normalCdf((attackedBy - cell) / u);
-		values[cell] = (1 - gross) * withstands * attacked + gross / 4;
+		const over = attackedBy === null ? 1 : normalCdf((attackedBy - cell) / u);
+		const under = holds === null ? 0 : normalCdf((holds - cell) / u);
+		values[cell] = (1 - gross) * Math.max(0, over - under) + misread;
 	}
 	return { streak: { how, values } };
 }

@@ -103,14 +103,14 @@ function tooLight(density: number, truth: number, build: Build): number {
 /**
  * A density: what it says of a solid piece by its fineness, and of what may lie under a layer.
  * formula: (1 − slip) x ((1 − innocent) x solid or core density + innocent x exponential shortfall below it) + slip x flat from 1 to 25, per
- * g/cm³. Tungsten under gold of 985 ‰ and more is given exactly the densities of the honest piece: whoever builds it trims it to match.
+ * g/cm³. Tungsten under gold of 985 ‰ and more is as likely as the honest piece: whoever builds it trims it to match.
  * rounding: none.
  * source: common practice, no source, for the chances (working defaults); densities as in solidDensity and metal/look-alikes.ts.
  */
 export function densityObservation(
 	density: number,
 	u: number,
-	of: { readonly metal: MainMetal; readonly build: Build; readonly honest: Vector; readonly matched: boolean },
+	of: { readonly metal: MainMetal; readonly build: Build; readonly matched: boolean },
 	balance: Balance | null
 ): Observation {
 	const { chance } = INNOCENT[of.build];
@@ -120,11 +120,10 @@ export function densityObservation(
 	const mix = (as: number, truth: number) =>
 		(1 - SLIP) * ((1 - chance) * as + chance * tooLight(density, truth, of.build)) + SLIP * ANY_DENSITY;
 	const values = solid.map((as, cell) => mix(as, (ranges[cell]!.low + ranges[cell]!.high) / 2));
-	const asHonest = of.honest.reduce((sum, share, cell) => sum + share * values[cell]!, 0);
 	return {
 		solid: values,
 		core: (core) => {
-			if (of.matched && core === 'tungsten') return asHonest;
+			if (of.matched && core === 'tungsten') return 'as solid';
 			const { low, high } = lookAlike(core);
 			return mix(coreDensity(core, density, u, of.metal), (low + high) / 2);
 		}
