@@ -7,9 +7,10 @@ import { metalSentence, type MetalProblem } from './sentences/metal.ts';
 import { numberSentence } from './sentences/number.ts';
 import { pieceSentence, type OfPiece } from './sentences/piece.ts';
 import { moneySentence, type MoneyProblem } from './sentences/price.ts';
+import { testerSentence, type OfTester } from './sentences/tester.ts';
 
 /** Everything that a person can cause. */
-export type Problem = NumberProblem | MassProblem | MetalProblem | OfPiece | MoneyProblem | LotProblem | BookProblem;
+export type Problem = NumberProblem | MassProblem | MetalProblem | OfPiece | MoneyProblem | LotProblem | BookProblem | OfTester;
 
 /**
  * The one catalogue: what was found, where, and what to do. Every kind is listed here and sent to the page of the
@@ -114,6 +115,15 @@ export function sentence(problem: Problem, format: Format = formatFor('en')): st
 		case 'table-too-many-cells':
 		case 'sample-impossible':
 			return lotSentence(problem, format);
+		case 'tester-no-name':
+		case 'tester-no-rows':
+		case 'tester-u-not-possible':
+		case 'tester-bias-over-u':
+		case 'tester-gross-too-often':
+		case 'odds-outside':
+		case 'odds-not-whole':
+		case 'prudence-outside':
+			return testerSentence(problem, format);
 		case 'record-shape':
 		case 'record-body':
 		case 'record-newer':

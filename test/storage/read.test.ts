@@ -15,7 +15,7 @@ describe('reading', () => {
 		expect(await book.standing('none')).toBeNull();
 		expect(await book.lotKeys('none')).toEqual([]);
 		expect(await book.lastOrder('none')).toBe(0);
-		expect([await book.openLots(), await book.stock(), await book.purchases(9), await book.scales(), await book.conflicts()]).toEqual([[], [], [], [], []]);
+		expect([await book.openLots(), await book.stock(), await book.purchases(9), await book.scales(), await book.testers(), await book.conflicts()]).toEqual([[], [], [], [], [], []]);
 		expect(await book.counts()).toEqual({ records: 0, purchasesOnlyHere: 0, conflicts: 0, photos: 0, damaged: 0, lastBackup: null, letter: 'A' });
 	});
 	it('a lot keeps its pieces in their order, with places between them', async () => {
@@ -64,15 +64,18 @@ describe('reading', () => {
 		}
 		expect(seen).toEqual(['b-6', 'b-5', 'b-4', 'b-3', 'b-2', 'b-1', 'b-0']);
 	});
-	it('settings and scales stand where they are looked for', async () => {
+	it('settings, scales and testers stand where they are looked for', async () => {
 		const book = await opened();
 		const scale = { id: 's', name: 'Counter', unit: 'g', division: decimal('0.01'), verification: decimal('0.1'), accuracyClass: null, checkedOn: null } as const;
+		const tester = { id: 't', name: 'Acids', kind: 'acids', rows: [{ metal: 'Au', colour: 'any', perMille: 585, u: 15 }], bias: 5, gross: 0.02, checkedOn: null } as const;
 		await saved(book, [
 			{ kind: 'settings', subject: 'settings', body: defaultSettings(), replaces: null },
-			{ kind: 'scale', subject: 's', body: scale, replaces: null }
+			{ kind: 'scale', subject: 's', body: scale, replaces: null },
+			{ kind: 'tester', subject: 't', body: tester, replaces: null }
 		]);
 		expect((await book.settings())?.body).toEqual(defaultSettings());
 		expect((await book.scales()).map(({ body }) => body)).toEqual([scale]);
+		expect((await book.testers()).map(({ body }) => body)).toEqual([tester]);
 	});
 	it('a window of a long lot reads that window only', async () => {
 		const book = await opened();

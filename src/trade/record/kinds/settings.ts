@@ -1,6 +1,7 @@
-import { hypotheses, type HypothesisId } from '../../evidence/belief.ts';
 import { findingKinds } from '../../evidence/finding.ts';
-import { origins, type Origin } from '../../evidence/origin.ts';
+import { checkOdds, type Odds, type OwnOdds } from '../../evidence/odds.ts';
+import { origins } from '../../evidence/origin.ts';
+import { checkPrudence, DEFAULT_PRUDENCE } from '../../evidence/prudence.ts';
 import type { TestCosts } from '../../evidence/test-costs.ts';
 import { lossRange, type LossOverrides, type LossPart, type Losses, type Range } from '../../melt/losses.ts';
 import type { MassUnitId } from '../../mass/units.ts';
@@ -11,10 +12,8 @@ import { lossClasses } from '../../piece/loss-class.ts';
 import type { Volatility } from '../../price/age.ts';
 import type { CurrencyCode } from '../../price/currency.ts';
 import { tiers, type Tier } from '../../price/offer.ts';
-import { byKey, decimalText, list, name, notNegative, nullable, object, oneOf, positiveText, refined, text, whole, within } from '../shape.ts';
+import { byKey, decimalText, list, name, notNegative, nullable, number, object, oneOf, positiveText, refined, text, whole } from '../shape.ts';
 import { currency, massUnit, metal } from './shared.ts';
-
-export type PriorOverrides = Partial<Readonly<Record<Origin, Readonly<Record<HypothesisId, number>>>>>;
 
 /** The buyer's own settings, one subject per book ('settings'). What is not set here has its default in its own folder. */
 export type SettingsBody = {
@@ -36,7 +35,7 @@ export type SettingsBody = {
 	/** What a test costs in time and damage, in the book's currency, where the buyer has said so. */
 	readonly testCosts: TestCosts;
 	/** The odds before any test, where the buyer has said so; each set sums to one. */
-	readonly priors: PriorOverrides;
+	readonly priors: OwnOdds;
 	/** Language of numbers and dates; null: the device's. */
 	readonly language: string | null;
 };
@@ -57,15 +56,12 @@ export function defaultSettings(): SettingsBody {
 		days: 14,
 		spreads: {},
 		losses: {},
-		prudence: 0.8,
+		prudence: DEFAULT_PRUDENCE,
 		testCosts: {},
 		priors: {},
 		language: null
 	};
 }
-
-/** How sure a buyer can ask to be: less than an even chance is no prudence, and nobody is quite sure. */
-export const PRUDENCE = { least: 0.5, most: 0.99 } as const;
 
 const range = (part: LossPart) =>
 	refined(object<Range>({ low: decimalText, high: decimalText }), ({ low, high }) => {
@@ -73,10 +69,10 @@ const range = (part: LossPart) =>
 		return checked.ok ? null : `a range of losses (${checked.problem.kind})`;
 	});
 
-const odds = refined(
-	object<Record<HypothesisId, number>>({ honest: within(0, 1), under: within(0, 1), other: within(0, 1), layered: within(0, 1) }),
-	(found) => (Math.abs(hypotheses.reduce((sum, id) => sum + found[id], 0) - 1) < 1e-9 ? null : 'odds that add up to 1')
-);
+const odds = refined(object<Odds>({ honest: number, under: number, other: number, layered: number }), (found) => {
+	const checked = checkOdds(found);
+	return checked.ok ? null : `odds (${checked.problem.kind})`;
+});
 
 /** What every version of the settings holds. */
 const fields = {
@@ -107,7 +103,7 @@ const fields = {
 
 export const settingsShape = object<SettingsBody>({
 	...fields,
-	prudence: within(PRUDENCE.least, PRUDENCE.most),
+	prudence: refined(number, (found) => (checkPrudence(found).ok ? null : 'a prudence from 0.5 to 0.99')),
 	testCosts: byKey(oneOf(findingKinds), refined(decimalText, (cost) => (cost.lt(0) ? 'a cost of 0 or more' : null))),
 	priors: byKey(oneOf(origins), odds)
 });
