@@ -11,10 +11,11 @@ import { CELLS, flat, momentsOf, quantileOf, type Vector } from './grid.ts';
 import { joint, throughSurface } from './joint.ts';
 import { magnetObservation } from './magnet.ts';
 import type { Observation } from './observation.ts';
+import { pooled, pooledDensities } from './pool.ts';
 import { priorOf, type Prior, type Priors } from './priors.ts';
 import type { Subject } from './subject.ts';
 import { touchObservation } from './touch.ts';
-import { waterObservation } from './water-reading.ts';
+import { densityObservation, usefulDensity } from './water-reading.ts';
 
 /** A piece before any test, made ready for its findings. */
 export type Start = {
@@ -47,7 +48,10 @@ function surfaceOf(bulk: Vector, { first, chances }: Enrichment): Vector {
 	return surface;
 }
 
-/** What one finding says of this piece; null when it says nothing (too light on the water scale, a coin that is not in the table). */
+/**
+ * What one finding says of this piece by itself; null when it says nothing: too light on the water scale, a coin that is not in the table.
+ * The balance that a fluorescence reading shows serves a water weighing.
+ */
 export function observe(start: Start, finding: Finding, balance: Balance | null): Observation | null {
 	const { metal, build } = start.subject;
 	switch (finding.kind) {
@@ -55,8 +59,10 @@ export function observe(start: Start, finding: Finding, balance: Balance | null)
 			return touchObservation(finding);
 		case 'fluorescence':
 			return fluorescenceObservation(finding, metal);
-		case 'water':
-			return waterObservation(finding, { metal, build, matched: isFineGold(start.subject) }, balance);
+		case 'water': {
+			const found = usefulDensity(finding);
+			return found === null ? null : densityObservation(found.density, found.u, { metal, build, matched: isFineGold(start.subject) }, balance);
+		}
 		case 'magnet':
 			return magnetObservation(finding.pull, metal);
 		case 'core':
@@ -70,10 +76,20 @@ export function observe(start: Start, finding: Finding, balance: Balance | null)
 	}
 }
 
-/** All that the findings say, each by itself; the balance that one reading shows serves the water weighing of another. */
-export function observeAll(start: Start, findings: readonly Finding[]): readonly (Observation | null)[] {
-	const balance = balanceOf(findings.filter((finding) => finding.kind === 'fluorescence'), start.subject.metal);
-	return findings.map((finding) => observe(start, finding, balance));
+export function balanceIn(start: Start, findings: readonly Finding[]): Balance | null {
+	return balanceOf(findings.filter((finding) => finding.kind === 'fluorescence'), start.subject.metal);
+}
+
+/** All that the findings say together: a test made again by the same tester is one, and so are water weighings that agree. */
+export function observeAll(start: Start, findings: readonly Finding[]): readonly Observation[] {
+	const { metal, build } = start.subject;
+	const balance = balanceIn(start, findings);
+	const densities = pooledDensities(findings.flatMap((finding) => (finding.kind === 'water' ? (usefulDensity(finding) ?? []) : [])));
+	const of = { metal, build, matched: isFineGold(start.subject) };
+	return [
+		...densities.map(({ density, u }) => densityObservation(density, u, of, balance)),
+		...pooled(findings.filter(({ kind }) => kind !== 'water'), metal).flatMap((finding) => observe(start, finding, balance) ?? [])
+	];
 }
 
 export type CoreOdds = {
@@ -163,7 +179,7 @@ function add(into: Outside, start: Start, { surface, bulk, solid, core }: Observ
  * rounding: none.
  * source: Bayes' rule; the chances of a streak going through (rub 0.4, notch 0.9) are working defaults, common practice, no source.
  */
-export function assessObservations(start: Start, observations: readonly (Observation | null)[]): Assessment {
+export function assessObservations(start: Start, observations: readonly Observation[]): Assessment {
 	const { subject, prior, cores, imitated, enrichment } = start;
 	const surface = new Product();
 	const bulk = new Product();
@@ -172,7 +188,6 @@ export function assessObservations(start: Start, observations: readonly (Observa
 	};
 	const streaks: NonNullable<Observation['streak']>[] = [];
 	for (const observation of observations) {
-		if (observation === null) continue;
 		surface.times(observation.surface);
 		bulk.times(observation.bulk);
 		bulk.times(observation.solid);

@@ -1,14 +1,12 @@
 import type { Fineness } from '../metal/fineness.ts';
 import { looksLike, type LookAlikeId } from '../metal/look-alikes.ts';
-import { standardUncertainty } from '../uncertainty/uncertain.ts';
-import { observeAll, type Start } from './assess.ts';
+import { balanceIn, observe, type Start } from './assess.ts';
 import { enrichmentOf } from './enrichment.ts';
 import type { Finding, Pull } from './finding.ts';
 import { surfaceReading } from './fluorescence.ts';
 import { CELLS, flat, type Vector } from './grid.ts';
 import { throughSurface } from './joint.ts';
-import { solidDensity } from './water-reading.ts';
-import { densityByWater } from './water-weighing.ts';
+import { solidDensity, usefulDensity } from './water-reading.ts';
 
 /** What one voice says of the piece, in figures that a sentence can be made of. Fineness in parts per thousand, density in g/cm³. */
 export type Says =
@@ -38,10 +36,9 @@ export function saysOf(start: Start, finding: Finding): Says | null {
 		case 'assay':
 			return { by: finding.kind, id, perMille: finding.perMille.toNumber() };
 		case 'water': {
-			const found = densityByWater(finding);
-			if (!found.ok || !found.value.useful) return null;
-			const { density } = found.value;
-			return { by: 'water', id, density: density.value, like: looksLike(density.value, standardUncertainty(density)).map((each) => each.id) };
+			const found = usefulDensity(finding);
+			if (found === null) return null;
+			return { by: 'water', id, density: found.density, like: looksLike(found.density, found.u).map((each) => each.id) };
 		}
 		case 'magnet':
 			return { by: 'magnet', id, pull: finding.pull };
@@ -60,10 +57,8 @@ const scaled = (values: Vector): Vector => {
 
 /** What a density says of one alloy without air in it: an innocent low reading is an excuse, not an agreement. */
 function bareDensity({ subject }: Start, finding: Finding): Vector | null {
-	const found = finding.kind === 'water' ? densityByWater(finding) : null;
-	if (found === null || !found.ok || !found.value.useful) return null;
-	const { density } = found.value;
-	return solidDensity(density.value, standardUncertainty(density), subject.metal, null);
+	const found = finding.kind === 'water' ? usefulDensity(finding) : null;
+	return found === null ? null : solidDensity(found.density, found.u, subject.metal, null);
 }
 
 /**
@@ -80,18 +75,20 @@ export function contradictions(start: Start, findings: readonly Finding[]): Cont
 	const mark: Says | null = claimed === null ? null : { by: 'mark', perMille: claimed };
 	if (mark !== null) voices.push({ says: mark, values: scaled(start.prior.bulk.honest.map((share, cell) => Math.max(share, cell >= claimed! ? 1e-3 : 0))) });
 	const found: Contradiction[] = [];
-	observeAll(start, findings).forEach((observation, index) => {
-		const says = saysOf(start, findings[index]!);
-		if (observation === null || says === null) return;
+	const balance = balanceIn(start, findings);
+	for (const finding of findings) {
+		const observation = observe(start, finding, balance);
+		const says = saysOf(start, finding);
+		if (observation === null || says === null) continue;
 		const { surface, bulk, solid, streak, core } = observation;
 		if (says.by === 'magnet' || says.by === 'coin') {
 			const over = Math.max(...start.cores.map((each) => Number(core?.(each.core) ?? 0)));
 			if (mark !== null && over > AGAINST_SOLID * (solid?.[0] ?? 1)) found.push({ first: mark, second: says });
-			return;
+			continue;
 		}
-		const values = streak?.values ?? bulk ?? (surface === undefined ? null : throughSurface(surface, enrichment)) ?? bareDensity(start, findings[index]!);
+		const values = streak?.values ?? bulk ?? (surface === undefined ? null : throughSurface(surface, enrichment)) ?? bareDensity(start, finding);
 		if (values !== null) voices.push({ says, values: scaled(values) });
-	});
+	}
 	voices.forEach((first, index) => {
 		for (const second of voices.slice(index + 1)) {
 			let most = 0;

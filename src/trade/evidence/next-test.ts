@@ -1,8 +1,8 @@
-import { assessObservations, observeAll, type Assessment, type Start } from './assess.ts';
+import { normalCdf } from '../uncertainty/normal.ts';
+import { assessObservations, balanceIn, observeAll, type Assessment, type Start } from './assess.ts';
 import { isFineGold } from './cores.ts';
 import type { Finding, FindingKind, Pull } from './finding.ts';
-import { balanceOf } from './fluorescence.ts';
-import { readingLikelihood } from './grid.ts';
+import { CELLS, quantileOf, type Vector } from './grid.ts';
 import { magnetObservation } from './magnet.ts';
 import type { Observation } from './observation.ts';
 import { touchObservation } from './touch.ts';
@@ -30,35 +30,46 @@ export type TestValue = {
 /** One result that a test may have, and how likely it is before the test is done: its width when results are continuous. */
 type Outcome = { readonly observation: Observation; readonly width: number };
 
-const between = (low: number, high: number, steps: number) =>
-	Array.from({ length: steps }, (_, step) => low + ((step + 0.5) * (high - low)) / steps);
+/** Shares of what is believed at which the readings that can come are parted, and some fineness that a core or a lower karat would show. */
+const SHARES = [0.01, 0.05, 0.1, 0.2, 0.3, 0.4, 0.5, 0.6, 0.7, 0.8, 0.9, 0.95, 0.99];
+const MARKS = [0, 50, 150, 300, 400, 500, 650, 800, 950, 1000];
 
-/** The readings that can come, close together where what is believed lies and coarse elsewhere; each with its width. */
-function readings({ low, high }: Pick<Assessment, 'low' | 'high'>, u: number): { readonly at: number; readonly width: number }[] {
-	const from = Math.max(0, low - 3 * u);
-	const to = Math.min(1000, high + 3 * u);
-	const spans = [[0, from, 12], [from, to, 36], [to, 1000, 8]] as const;
-	return spans.flatMap(([a, b, steps]) => (b - a < 1e-9 ? [] : between(a, b, steps).map((at) => ({ at, width: (b - a) / steps }))));
+/** The readings that can come, in bands: how likely each band is for every fineness. All bands together are certain. */
+function bands(now: Pick<Assessment, 'bulk'>, { u, gross }: { readonly u: number; readonly gross: number }, breakEven: number): Vector[] {
+	const edges = [...new Set([...MARKS, ...SHARES.map((share) => quantileOf(now.bulk, share)), Math.min(1000, Math.max(0, breakEven))])].sort((a, b) => a - b);
+	return edges.slice(1).map((high, index) => {
+		const low = edges[index]!;
+		const values = new Float64Array(CELLS);
+		for (let cell = 0; cell < CELLS; cell += 1) {
+			const above = high === 1000 ? 1 : normalCdf((high - cell) / u);
+			const below = low === 0 ? 0 : normalCdf((low - cell) / u);
+			values[cell] = (1 - gross) * (above - below) + (gross * (high - low)) / 1000;
+		}
+		return values;
+	});
 }
 
-const DENSITIES = between(5, 23, 90);
+const STEPS = 60;
+const LEAST_DENSITY = 5;
+const STEP = (23 - LEAST_DENSITY) / STEPS;
+const DENSITIES = Array.from({ length: STEPS }, (_, step) => LEAST_DENSITY + (step + 0.5) * STEP);
 
-function outcomesOf(start: Start, now: Assessment, test: Possible, findings: readonly Finding[]): Outcome[] {
+function outcomesOf(start: Start, now: Assessment, test: Possible, findings: readonly Finding[], breakEven: number): Outcome[] {
 	const { subject } = start;
 	switch (test.kind) {
 		case 'core':
 		case 'assay':
-			return readings(now, test.u).map(({ at, width }) => ({ observation: { bulk: readingLikelihood(at, test.u, test.gross) }, width }));
+			return bands(now, test, breakEven).map((bulk) => ({ observation: { bulk }, width: 1 }));
 		case 'fluorescence':
-			return readings(now, test.u).map(({ at, width }) => ({ observation: { surface: readingLikelihood(at, test.u, test.gross) }, width }));
+			return bands(now, test, breakEven).map((surface) => ({ observation: { surface }, width: 1 }));
 		case 'magnet':
 			return (['none', 'weak', 'strong'] as const).map((pull: Pull) => ({ observation: magnetObservation(pull, subject.metal), width: 1 }));
 		case 'water': {
-			const balance = balanceOf(findings.filter((finding) => finding.kind === 'fluorescence'), subject.metal);
+			const balance = balanceIn(start, findings);
 			const of = { metal: subject.metal, build: subject.build, matched: isFineGold(subject) };
 			// wider than the reading's own doubt, so that no result falls between two of the grid
-			const u = Math.max(test.u, 0.15);
-			return DENSITIES.map((density) => ({ observation: densityObservation(density, u, of, balance), width: 18 / DENSITIES.length }));
+			const u = Math.max(test.u, STEP / 2);
+			return DENSITIES.map((density) => ({ observation: densityObservation(density, u, of, balance), width: STEP }));
 		}
 		case 'touch': {
 			// two acids about the mark: attacked by both, between them, withstands both
@@ -85,7 +96,7 @@ export function testValue(
 	test: Possible,
 	stake: Stake,
 	cost: number,
-	known: readonly (Observation | null)[] = observeAll(start, findings),
+	known: readonly Observation[] = observeAll(start, findings),
 	now: Assessment = assessObservations(start, known)
 ): TestValue {
 	const margin = (mean: number) => (stake.whole * mean) / 1000 - stake.price;
@@ -93,7 +104,7 @@ export function testValue(
 	const turn = margin(now.mean) > 0 ? -1 : 1;
 	let chances = 0;
 	let won = 0;
-	for (const { observation, width } of outcomesOf(start, now, test, findings)) {
+	for (const { observation, width } of outcomesOf(start, now, test, findings, (1000 * stake.price) / stake.whole)) {
 		const result = assessObservations(start, [...known, observation]);
 		const chance = width * Math.exp(result.logEvidence - now.logEvidence);
 		chances += chance;
@@ -103,7 +114,12 @@ export function testValue(
 	return { test, gain, cost, net: gain - cost };
 }
 
-/** The tests that could be done, the one most worth doing first; a core test comes before a fire assay that is worth as much. */
+/** Whether a test was done: made again by the same tester it says the same again. */
+function done(test: Possible, findings: readonly Finding[]): boolean {
+	return findings.some((finding) => finding.kind === test.kind && (finding.kind !== 'touch' || test.kind !== 'touch' || finding.how === test.how));
+}
+
+/** The tests that were not done yet, the one most worth doing first. */
 export function nextTests(
 	start: Start,
 	findings: readonly Finding[],
@@ -114,6 +130,7 @@ export function nextTests(
 	const known = observeAll(start, findings);
 	const now = assessObservations(start, known);
 	return tests
+		.filter((test) => !done(test, findings))
 		.map((test) => testValue(start, findings, test, stake, costs[test.kind], known, now))
 		.sort((a, b) => b.net - a.net);
 }

@@ -9,6 +9,7 @@ import type { Water } from './finding.ts';
 import type { Balance } from './fluorescence.ts';
 import { CELLS, type Vector } from './grid.ts';
 import type { Observation } from './observation.ts';
+import type { Density } from './pool.ts';
 import type { MainMetal } from './subject.ts';
 import { densityByWater } from './water-weighing.ts';
 
@@ -130,13 +131,8 @@ export function densityObservation(
 	};
 }
 
-/** A water weighing; null when the piece is too light on its scale to say anything. */
-export function waterObservation(
-	finding: Pick<Water, 'method' | 'air' | 'water' | 'division' | 'temperature'>,
-	of: Parameters<typeof densityObservation>[2],
-	balance: Balance | null
-): Observation | null {
+/** The density of a water weighing; null when the piece is too light on its scale to say anything. */
+export function usefulDensity(finding: Pick<Water, 'method' | 'air' | 'water' | 'division' | 'temperature'>): Density | null {
 	const found = densityByWater(finding);
-	if (!found.ok || !found.value.useful) return null;
-	return densityObservation(found.value.density.value, standardUncertainty(found.value.density), of, balance);
+	return found.ok && found.value.useful ? { density: found.value.density.value, u: standardUncertainty(found.value.density) } : null;
 }

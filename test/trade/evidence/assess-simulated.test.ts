@@ -41,15 +41,18 @@ function made(id: HypothesisId, random: () => number, world: World): Truth {
 	const layer = pick(random, strata, ({ chance }) => chance).id;
 	const under = pick(random, start.cores, ({ chance }) => chance).core;
 
-	const fluorescence = () => reading(random() < 0.03 ? random() * 1000 : normal(surface + world.bias, 16));
-	const cut = () => core(random() < 0.005 ? random() * 1000 : normal(cell + world.bias, 16));
+	// each test by another tester: what one says again is no news
+	let testers = 0;
+	const tester = () => `t${(testers += 1)}`;
+	const fluorescence = () => reading(random() < 0.03 ? random() * 1000 : normal(surface + world.bias, 16), { tester: tester() });
+	const cut = () => core(random() < 0.005 ? random() * 1000 : normal(cell + world.bias, 16), { tester: tester() });
 	const streak = () => {
 		const how = random() < 0.5 ? ('rub' as const) : ('notch' as const);
 		const through = layered ? layer === 'thin' || (layer === 'notch' && how === 'notch') : how === 'notch';
 		const seen = normal((through ? cell : surface) + world.bias, 15);
 		const acids = [null, karat(12), karat(16), null];
 		const place = random() < 0.02 ? Math.floor(random() * 3) : seen < 500 - 15 ? 0 : seen < (16 / 24) * 1000 - 15 ? 1 : 2;
-		return touch({ how, holds: acids[place]!, attackedBy: acids[place + 1]! });
+		return touch({ tester: tester(), how, holds: acids[place]!, attackedBy: acids[place + 1]! });
 	};
 	const pull = () => {
 		const kind = layered ? lookAlike(under).magnet : 'none';

@@ -97,12 +97,13 @@ describe('what is believed of a piece', () => {
 			const { odds } = of(stamped14, ...findings);
 			return odds.layered / odds.honest / (prior.layered / prior.honest);
 		};
-		const rubs = [1, 2, 5, 20].map((count) => ratio(...Array.from({ length: count }, () => touch())));
+		// each by other acids: streaks of one set say the same again
+		const rubs = [1, 2, 5, 20].map((count) => ratio(...Array.from({ length: count }, (_, at) => touch({ tester: `acids ${at}` }))));
 		// 0.4 of layers are thin enough for a rub: 0.6 is left, however often it is repeated
 		for (const each of rubs) expect(each).toBeGreaterThan(0.55);
 		expect(rubs[3]).toBeLessThan(0.65);
 		// acids far from the piece on both sides, so that the streak itself is in no doubt
-		const notches = ratio(...Array.from({ length: 20 }, () => touch({ how: 'notch', holds: karat(10) })), touch({ holds: karat(10) }));
+		const notches = ratio(...Array.from({ length: 20 }, (_, at) => touch({ tester: `acids ${at}`, how: 'notch', holds: karat(10) })), touch({ holds: karat(10) }));
 		expect(notches).toBeGreaterThan(0.09);
 		expect(notches).toBeLessThan(0.12);
 	});
@@ -139,6 +140,15 @@ describe('what is believed of a piece', () => {
 			{ numRuns: 100 }
 		);
 	}, 120_000);
+
+	it('does not grow surer when one tester says the same again', () => {
+		const once = of(stamped14, touch(), reading(600, { u: 5 }), water(13.2));
+		const often = of(stamped14, touch(), touch(), reading(600, { u: 5 }), reading(600, { u: 5 }), reading(600, { u: 5 }), water(13.2), water(13.2));
+		expect(often.mean).toBeCloseTo(once.mean, 9);
+		expect(often.odds.layered).toBeCloseTo(once.odds.layered, 12);
+		// another tester's reading is news
+		expect(of(stamped14, touch(), reading(600, { u: 5 }), reading(600, { u: 5, tester: 'y' }), water(13.2)).mean).toBeGreaterThan(once.mean);
+	});
 
 	it('does the same for silver: nickel silver and tin under a silver surface', () => {
 		expect(of(sterling).median).toBeGreaterThan(920);
