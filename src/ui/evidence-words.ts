@@ -1,6 +1,8 @@
 import type { HypothesisId } from '$trade/evidence/belief.ts';
 import type { FindingKind } from '$trade/evidence/finding.ts';
+import type { Odds } from '$trade/evidence/odds.ts';
 import type { TesterKind } from '$trade/evidence/tester.ts';
+import type { Format } from './format.ts';
 
 /** What a piece can be. */
 export const hypothesisWords: Readonly<Record<HypothesisId, string>> = {
@@ -25,3 +27,8 @@ export const testerKindWords: Readonly<Record<TesterKind, string>> = {
 	fluorescence: 'reads by fluorescence',
 	acids: 'acids and a stone'
 };
+
+/** "as its mark says 97.5 %, under its mark 1 %, ...". */
+export function oddsWords(odds: Odds, ids: readonly HypothesisId[], format: Format): string {
+	return ids.map((id) => `${hypothesisWords[id]} ${format.estimate(odds[id] * 100, 6)}\u00a0%`).join(', ');
+}

@@ -18,7 +18,12 @@ export function typedPercent(share: Decimal, mark: DecimalMark): string {
 
 /** An estimated share as a percentage to be typed over, to four places: 0.16 is "16". */
 export function typedEstimate(share: number, mark: DecimalMark): string {
-	const text = String(Number((share * 100).toFixed(4)));
+	return typedFigure(share * 100, mark);
+}
+
+/** An estimate in its own unit to be typed over, to four places. */
+export function typedFigure(value: number, mark: DecimalMark): string {
+	const text = String(Number(value.toFixed(4)));
 	if (mark === 'dot') return text;
 	return /^[1-9]\d{0,2}\.\d{3}$/.test(text) ? `0${text.replace('.', ',')}` : text.replace('.', ',');
 }

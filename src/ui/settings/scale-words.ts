@@ -34,7 +34,7 @@ function inScaleUnit(mass: Mass, { unit }: Scale, format: Format): string {
 }
 
 /** The day of a check as it was typed in a date field. */
-function dayWords(day: string, format: Format): string {
+export function dayWords(day: string, format: Format): string {
 	const at = new Date(`${day}T12:00`).getTime();
 	return Number.isNaN(at) ? day : format.date(at);
 }

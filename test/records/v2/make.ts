@@ -19,7 +19,10 @@ const readBy = { tester: 'tester-1', u: 16, bias: 2, gross: 0.03 };
 const evidence: Evidence = {
 	build: 'hollow',
 	findings: [
-		{ kind: 'touch', id: 'f1', at, how: 'rub', holds: { perMille: ratio(d('1750'), d('3')) }, attackedBy: { perMille: ratio(d('750'), d('1')) }, tester: null, u: 15, bias: 5, gross: 0.02 },
+		{
+			kind: 'touch', id: 'f1', at, how: 'rub', holds: { perMille: ratio(d('1750'), d('3')) }, attackedBy: { perMille: ratio(d('750'), d('1')) }, tester: null,
+			u: 15, bias: 5, gross: 0.02
+		},
 		{ kind: 'fluorescence', id: 'f2', at, ...readBy, reads: [{ metal: 'Au', perMille: d('588.2') }, { metal: 'Cu', perMille: d('300') }] },
 		{ kind: 'water', id: 'f3', at, method: 'suspended', air: d('12.4'), water: d('11.00'), division: d('0.01'), temperature: d('21.5') },
 		{ kind: 'magnet', id: 'f4', at, pull: 'none' },

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { decimal } from '../../../src/trade/number/decimal.ts';
 import { parseNumber } from '../../../src/trade/number/field.ts';
-import { typedEstimate, typedNumber, typedPercent } from '../../../src/ui/format/typed-text.ts';
+import { typedEstimate, typedFigure, typedNumber, typedPercent } from '../../../src/ui/format/typed-text.ts';
 
 describe('a figure to be typed over', () => {
 	it('has the mark of the buyer and at least the places asked for', () => {
@@ -15,6 +15,9 @@ describe('a figure to be typed over', () => {
 		expect(typedEstimate(0.16, 'dot')).toBe('16');
 		expect(typedEstimate(0.07, 'comma')).toBe('7');
 		expect(typedEstimate(0.0035, 'comma')).toBe('0,35');
+		expect(typedFigure(12.5, 'comma')).toBe('12,5');
+		expect(typedFigure(16, 'dot')).toBe('16');
+		expect(typedFigure(1.125, 'comma')).toBe('01,125');
 	});
 
 	it('is read back as the same figure, whatever the mark, and never asked about (2 000 cases)', () => {
