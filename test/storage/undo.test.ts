@@ -1,4 +1,6 @@
 import { describe, expect, it } from 'vitest';
+import { rowOf } from '../../src/storage/rows.ts';
+import { frozen } from '../trade/record/kinds/frozen.ts';
 import { contentOf, device, lotChange, opened, pieceChange, problem, purchaseChange, raw, saved, value } from './some-books.ts';
 
 describe('taking back', () => {
@@ -51,5 +53,23 @@ describe('taking back', () => {
 		await db.records.delete(first!.id);
 		expect(problem(await book.undoOf([second!.id]))).toEqual({ kind: 'storage-no-such-record', record: first!.id });
 		db.close();
+	});
+	it('of the first change since an older release brings back what that release wrote, in the form of today', async () => {
+		const on = device();
+		const book = await opened(on);
+		const old = frozen('settings', 1);
+		const db = await raw(on);
+		await db.records.put(old);
+		await db.current.put({ ...rowOf([old]) });
+		db.close();
+		const before = (await book.settings())!;
+		expect(before.damage).toBeNull();
+		const kept = before.body!;
+		expect([kept.currency, kept.mark, kept.prudence, kept.testCosts, kept.priors]).toEqual(['EUR', 'comma', 0.8, {}, {}]);
+		const [changed] = await saved(book, [{ kind: 'settings', subject: 'settings', body: { ...kept, prudence: 0.9 }, replaces: before.record }]);
+		expect([changed!.version, (await book.settings())?.body?.prudence]).toEqual([2, 0.9]);
+		const [back] = await saved(book, value(await book.undoOf([changed!.id])));
+		expect(back!.version).toBe(2);
+		expect((await book.settings())?.body).toEqual(kept);
 	});
 });
