@@ -237,6 +237,105 @@ describe('the settings, without a signal', () => {
 		await losses.getByText('no metal 0 % to 0.5 %, lost 0.2 % to 0.8 %, fine kept 99.9 % to 99.95 %').waitFor();
 	});
 
+	it('describe a tester from its working defaults, and say which figures are the buyer’s own', async () => {
+		const { page } = await settingsOffline();
+		const testers = part(page, 'Testers and acids');
+		await testers.getByText('None is described yet').waitFor();
+		await testers.getByText('Reads by fluorescence: working defaults').click();
+		await testers.getByRole('row', { name: 'Gold 750 ‰, white ±13 ‰ working default' }).waitFor();
+		await press(page, 'Add a tester or acids');
+		expect(await testers.getByLabel('Gold 585 ‰', { exact: true }).inputValue()).toBe('16');
+		await testers.getByLabel('acids and a stone').check();
+		expect(await testers.getByLabel('Gold 585 ‰', { exact: true }).inputValue()).toBe('15');
+		await testers.getByLabel('reads by fluorescence').check();
+		await press(page, 'Save the tester');
+		await testers.getByText('Give it a name').waitFor();
+		await testers.getByLabel('Name of the tester or the acids').fill('Pocket reader');
+		await testers.getByLabel('Gold 585 ‰', { exact: true }).fill('12.5');
+		await testers.getByRole('button', { name: 'Remove Palladium 500 ‰' }).click();
+		await press(page, 'Add this alloy');
+		await testers.getByText('A number is needed here.').waitFor();
+		await testers.getByLabel('Fineness').fill('916.7');
+		await press(page, 'Add this alloy');
+		await testers.getByLabel('Gold 916.7 ‰', { exact: true }).fill('0.5');
+		await press(page, 'Save the tester');
+		await testers.getByText('the best of them is good to ±0.5 ‰').waitFor();
+		const bias = testers.getByLabel('Error of its own, the same in all its readings');
+		expect(await bias.evaluate((element) => element === document.activeElement)).toBe(true);
+		await bias.fill('0.5');
+		// half typed, it is still there after a reload
+		await page.waitForTimeout(600);
+		await page.reload();
+		await testers.getByRole('heading', { name: 'A new tester' }).waitFor();
+		await page.waitForFunction(() => [...document.querySelectorAll('input')].some(({ value }) => value === 'Pocket reader'));
+		expect(await testers.getByLabel('Gold 916.7 ‰', { exact: true }).inputValue()).toBe('0.5');
+		await testers.getByLabel('Day of its last check with a known sample').fill('2026-05-03');
+		await press(page, 'Save the tester');
+		await said(page, 'Pocket reader: saved.');
+
+		await page.reload();
+		await testers.getByText('reads by fluorescence, error of its own ±0.5 ‰, wrong in 3 %, checked 3 May 2026').waitFor();
+		await testers.getByText('3 of 14 figures are yours, the others are working defaults').waitFor();
+		await testers.getByText('What one reading is good to').click();
+		await testers.getByRole('row', { name: 'Gold 585 ‰ ±12.5 ‰ yours' }).waitFor();
+		await testers.getByRole('row', { name: 'Silver 925 ‰ ±5 ‰ working default' }).waitFor();
+		await testers.getByRole('button', { name: 'Change Pocket reader' }).click();
+		await testers.getByLabel('Name of the tester or the acids').fill('Old reader');
+		await press(page, 'Save the tester');
+		await said(page, 'Old reader: saved.');
+		await testers.getByRole('button', { name: 'Change Old reader' }).click();
+		await press(page, 'Remove this tester');
+		await said(page, 'Old reader is removed. What it has read stays.');
+		await testers.getByText('None is described yet').waitFor();
+		await press(page, 'Undo');
+		await said(page, 'Taken back.');
+		await testers.getByRole('button', { name: 'Change Old reader' }).waitFor();
+	});
+
+	it('change prudence, costs and odds, and go back to the working defaults', async () => {
+		const { page } = await settingsOffline();
+		const prudence = part(page, 'Prudence').getByLabel('Chance that a tested piece is at least what it is taken at');
+		expect(await prudence.inputValue()).toBe('80');
+		await prudence.fill('40');
+		await press(page, 'Save the prudence');
+		await page.getByText('40 % cannot be reckoned with.').waitFor();
+		await prudence.fill('90');
+		await press(page, 'Save the prudence');
+		await said(page, 'The prudence is changed.');
+
+		const costs = part(page, 'What a test costs');
+		expect(await costs.getByLabel('Core test').inputValue()).toBe('12.00');
+		await costs.getByLabel('Core test').fill('7.50');
+		await press(page, 'Save the costs');
+		await said(page, 'What a test costs is changed.');
+		await press(page, 'Undo');
+		await said(page, 'Taken back.');
+		await page.waitForFunction(() => [...document.querySelectorAll('input')].some(({ value }) => value === '12.00'));
+		await costs.getByLabel('Core test').fill('8');
+		await press(page, 'Save the costs');
+		await said(page, 'What a test costs is changed.');
+
+		const odds = part(page, 'Odds before any test');
+		await odds.getByRole('button', { name: 'Change A maker in the US, since October 1981' }).click();
+		expect(await odds.getByLabel('As its mark says').inputValue()).toBe('90');
+		await odds.getByLabel('As its mark says').fill('80');
+		await press(page, 'Save the odds');
+		await odds.getByText('These add up to 90 %.').waitFor();
+		await odds.getByLabel('Under its mark').fill('16');
+		await press(page, 'Save the odds');
+		await said(page, 'These odds are changed.');
+
+		await page.reload();
+		await odds.getByText('as its mark says 80 %, under its mark 16 %, another standard 3 %, a layer, core or filling 1 %').waitFor();
+		expect(await prudence.inputValue()).toBe('90');
+		await costs.getByText('Yours; the working default is 12.00.').waitFor();
+		await odds.getByRole('button', { name: 'Change A maker in the US, since October 1981' }).click();
+		await press(page, 'Back to the working default');
+		await said(page, 'These odds are the working defaults again.');
+		await odds.getByText('as its mark says 90 %, under its mark 6 %').waitFor();
+		expect(await prudence.inputValue()).toBe('90');
+	});
+
 	it('are accessible, do not scroll sideways, and keep a half-typed form open', async () => {
 		for (const device of ['phone', 'desktop'] as const) {
 			const { page } = await settingsOffline({ device });
@@ -247,7 +346,9 @@ describe('the settings, without a signal', () => {
 			await part(page, 'Scales').getByLabel('Smallest step of the display, d').fill('0.01');
 			await part(page, 'Scales').getByLabel('Verification interval on its plate, e').fill('0.1');
 			await page.getByRole('button', { name: 'Change Dental, with ceramic' }).click();
-			await page.getByRole('button', { name: 'Change Nobody knows: no mark' }).click();
+			await part(page, 'How far marks are believed').getByRole('button', { name: 'Change Nobody knows: no mark' }).click();
+			await part(page, 'Odds before any test').getByRole('button', { name: 'Change A stranger: a bar' }).click();
+			await press(page, 'Add a tester or acids');
 			await page.getByText('How far prices move in a year, by metal').click();
 			await page.waitForTimeout(600);
 			await expectClean(page, `settings with open forms, ${device}`);
@@ -260,6 +361,10 @@ describe('the settings, without a signal', () => {
 			await part(page, 'Scales').scrollIntoViewIfNeeded();
 			await part(page, 'Scales').getByText('in service').scrollIntoViewIfNeeded();
 			await shot(page, `settings-scale-${device}`);
+			await part(page, 'Testers and acids').getByText('What one reading is good to').scrollIntoViewIfNeeded();
+			await shot(page, `settings-testers-${device}`);
+			await part(page, 'Odds before any test').getByText('Working default:').scrollIntoViewIfNeeded();
+			await shot(page, `settings-odds-${device}`);
 			await page.reload();
 			await page.getByRole('heading', { name: 'A new scale' }).waitFor();
 			expect(await part(page, 'Scales').getByLabel('Name of the scale').inputValue()).toBe('Pocket');
