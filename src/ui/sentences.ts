@@ -1,6 +1,7 @@
 import type { NumberProblem } from '$trade/number/field.ts';
 import { formatFor, type Format } from './format.ts';
 import { bookSentence, type BookProblem } from './sentences/book.ts';
+import { evidenceSentence, type OfEvidence } from './sentences/evidence.ts';
 import { lotSentence, type LotProblem } from './sentences/lot.ts';
 import { massSentence, type MassProblem } from './sentences/mass.ts';
 import { metalSentence, type MetalProblem } from './sentences/metal.ts';
@@ -10,7 +11,7 @@ import { moneySentence, type MoneyProblem } from './sentences/price.ts';
 import { testerSentence, type OfTester } from './sentences/tester.ts';
 
 /** Everything that a person can cause. */
-export type Problem = NumberProblem | MassProblem | MetalProblem | OfPiece | MoneyProblem | LotProblem | BookProblem | OfTester;
+export type Problem = NumberProblem | MassProblem | MetalProblem | OfPiece | MoneyProblem | LotProblem | BookProblem | OfTester | OfEvidence;
 
 /**
  * The one catalogue: what was found, where, and what to do. Every kind is listed here and sent to the page of the
@@ -124,6 +125,11 @@ export function sentence(problem: Problem, format: Format = formatFor('en')): st
 		case 'odds-not-whole':
 		case 'prudence-outside':
 			return testerSentence(problem, format);
+		case 'water-temperature':
+		case 'water-mass-not-positive':
+		case 'water-no-loss':
+		case 'water-density-unlikely':
+			return evidenceSentence(problem, format);
 		case 'record-shape':
 		case 'record-body':
 		case 'record-newer':

@@ -1,96 +1,11 @@
-import { coinById } from '../metal/coins.ts';
 import type { HypothesisId } from './belief.ts';
-import { coinObservation } from './coin-weight.ts';
-import { coreObservation } from './core-test.ts';
-import { coresOf, isFineGold, strata, type CoreChance } from './cores.ts';
-import { enrichmentOf, type Enrichment } from './enrichment.ts';
+import { strata, type CoreChance } from './cores.ts';
 import type { Finding } from './finding.ts';
-import { assayObservation } from './fire-assay.ts';
-import { balanceOf, fluorescenceObservation, type Balance } from './fluorescence.ts';
 import { CELLS, flat, momentsOf, quantileOf, type Vector } from './grid.ts';
 import { joint, throughSurface } from './joint.ts';
-import { magnetObservation } from './magnet.ts';
 import type { Observation } from './observation.ts';
-import { pooled, pooledDensities } from './pool.ts';
-import { priorOf, type Prior, type Priors } from './priors.ts';
-import type { Subject } from './subject.ts';
-import { touchObservation } from './touch.ts';
-import { densityObservation, usefulDensity } from './water-reading.ts';
-
-/** A piece before any test, made ready for its findings. */
-export type Start = {
-	readonly subject: Subject;
-	readonly prior: Prior;
-	readonly cores: readonly CoreChance[];
-	/** What the surface of a layered piece is made to look like: that of the honest piece, or of any standard where there is no mark. */
-	readonly imitated: Vector;
-	readonly enrichment: Enrichment;
-};
-
-export function startOf(subject: Subject, priors: Priors = {}): Start {
-	const prior = priorOf(subject, priors);
-	const enrichment = enrichmentOf(subject);
-	const shown = prior.bulk[subject.claimed === null ? 'other' : 'honest'];
-	return { subject, prior, cores: coresOf(subject), imitated: surfaceOf(shown, enrichment), enrichment };
-}
-
-/** The surface of a solid piece: its bulk, each part moved by the enrichment. */
-function surfaceOf(bulk: Vector, { first, chances }: Enrichment): Vector {
-	const surface = new Float64Array(CELLS);
-	for (let cell = 0; cell < CELLS; cell += 1) {
-		const share = bulk[cell]!;
-		// what weighs less than this by all its cells together is lost in the last digit
-		if (share < 1e-18) continue;
-		for (let step = 0; step < chances.length; step += 1) {
-			surface[Math.min(CELLS - 1, Math.max(0, cell + first + step))]! += share * chances[step]!;
-		}
-	}
-	return surface;
-}
-
-/**
- * What one finding says of this piece by itself; null when it says nothing: too light on the water scale, a coin that is not in the table.
- * The balance that a fluorescence reading shows serves a water weighing.
- */
-export function observe(start: Start, finding: Finding, balance: Balance | null): Observation | null {
-	const { metal, build } = start.subject;
-	switch (finding.kind) {
-		case 'touch':
-			return touchObservation(finding);
-		case 'fluorescence':
-			return fluorescenceObservation(finding, metal);
-		case 'water': {
-			const found = usefulDensity(finding);
-			return found === null ? null : densityObservation(found.density, found.u, { metal, build, matched: isFineGold(start.subject) }, balance);
-		}
-		case 'magnet':
-			return magnetObservation(finding.pull, metal);
-		case 'core':
-			return coreObservation(finding);
-		case 'assay':
-			return assayObservation(finding);
-		case 'coin': {
-			const coin = coinById(finding.coin);
-			return coin === null ? null : coinObservation(finding, coin);
-		}
-	}
-}
-
-export function balanceIn(start: Start, findings: readonly Finding[]): Balance | null {
-	return balanceOf(findings.filter((finding) => finding.kind === 'fluorescence'), start.subject.metal);
-}
-
-/** All that the findings say together: a test made again by the same tester is one, and so are water weighings that agree. */
-export function observeAll(start: Start, findings: readonly Finding[]): readonly Observation[] {
-	const { metal, build } = start.subject;
-	const balance = balanceIn(start, findings);
-	const densities = pooledDensities(findings.flatMap((finding) => (finding.kind === 'water' ? (usefulDensity(finding) ?? []) : [])));
-	const of = { metal, build, matched: isFineGold(start.subject) };
-	return [
-		...densities.map(({ density, u }) => densityObservation(density, u, of, balance)),
-		...pooled(findings.filter(({ kind }) => kind !== 'water'), metal).flatMap((finding) => observe(start, finding, balance) ?? [])
-	];
-}
+import { observeAll } from './observe.ts';
+import type { Start } from './start.ts';
 
 export type CoreOdds = {
 	readonly core: CoreChance['core'];

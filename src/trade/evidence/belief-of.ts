@@ -1,7 +1,8 @@
-import { assess, startOf, type Assessment } from './assess.ts';
+import { assess, type Assessment } from './assess.ts';
+import { startOf } from './start.ts';
 import type { Belief } from './belief.ts';
 import type { Finding, ReadBy } from './finding.ts';
-import type { Priors } from './priors.ts';
+import type { OwnOdds } from './odds.ts';
 import type { Subject } from './subject.ts';
 import { decimal } from '../number/decimal.ts';
 
@@ -31,8 +32,8 @@ function moved(finding: Finding, by: number): Finding {
  * rounding: none.
  * source: JCGM 100:2008, 5.1.3 (sensitivity by moving an input) and F.1.2.3 (an error that several estimates have in common).
  */
-export function beliefOf(subject: Subject, findings: readonly Finding[], priors: Priors = {}): Belief {
-	const start = startOf(subject, priors);
+export function beliefOf(subject: Subject, findings: readonly Finding[], own: OwnOdds = {}): Belief {
+	const start = startOf(subject, own);
 	const found = assess(start, findings);
 	const shared: Record<string, number> = {};
 	const testers = new Map(findings.flatMap((finding) => {

@@ -1,6 +1,7 @@
 import type { Fineness } from '../metal/fineness.ts';
 import { looksLike, type LookAlikeId } from '../metal/look-alikes.ts';
-import { balanceIn, observe, type Start } from './assess.ts';
+import { balanceIn, observe } from './observe.ts';
+import type { Start } from './start.ts';
 import { enrichmentOf } from './enrichment.ts';
 import type { Finding, Pull } from './finding.ts';
 import { surfaceReading } from './fluorescence.ts';

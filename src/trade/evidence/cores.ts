@@ -14,7 +14,8 @@ const UNDER_FINE_GOLD = list(['tungsten', 85], ['tungsten-alloy', 8], ['copper',
 
 const UNDER: Readonly<Record<MainMetal, readonly CoreChance[]>> = {
 	Au: list(
-		['brass', 42], ['copper', 20], ['silver', 15], ['steel', 7], ['nickel-silver', 5], ['lead', 4], ['zinc', 3], ['tungsten-alloy', 2], ['tungsten', 1], ['tin', 1]
+		['brass', 42], ['copper', 20], ['silver', 15], ['steel', 7], ['nickel-silver', 5],
+		['lead', 4], ['zinc', 3], ['tungsten-alloy', 2], ['tungsten', 1], ['tin', 1]
 	),
 	Ag: list(['nickel-silver', 35], ['brass', 25], ['copper', 20], ['tin', 10], ['steel', 5], ['zinc', 3], ['lead', 2]),
 	Pt: list(['silver', 30], ['nickel-silver', 20], ['steel', 20], ['tungsten-alloy', 15], ['copper', 10], ['tungsten', 5]),

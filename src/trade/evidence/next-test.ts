@@ -1,5 +1,7 @@
 import { normalCdf } from '../uncertainty/normal.ts';
-import { assessObservations, balanceIn, observeAll, type Assessment, type Start } from './assess.ts';
+import { assessObservations, type Assessment } from './assess.ts';
+import { balanceIn, observeAll } from './observe.ts';
+import type { Start } from './start.ts';
 import { isFineGold } from './cores.ts';
 import type { Finding, FindingKind, Pull } from './finding.ts';
 import { CELLS, quantileOf, type Vector } from './grid.ts';

@@ -1,11 +1,9 @@
 import { assert } from '../number/decimal.ts';
 import { hypotheses, type HypothesisId } from './belief.ts';
 import { bellPrior, CELLS, cellHigh, cellLow, normalised, type Vector } from './grid.ts';
+import type { Odds, OwnOdds } from './odds.ts';
 import type { Origin } from './origin.ts';
 import type { MainMetal, Subject } from './subject.ts';
-
-export type Odds = Readonly<Record<HypothesisId, number>>;
-export type Priors = Partial<Readonly<Record<Origin, Odds>>>;
 
 const odds = (honest: number, under: number, other: number, layered: number): Odds => ({ honest, under, other, layered });
 
@@ -55,11 +53,11 @@ export type Prior = { readonly odds: Odds; readonly bulk: Readonly<Record<Hypoth
  * rounding: none.
  * source: 15 U.S.C. 295 and the marks' laws for the tolerances (metal/law.ts); all shapes are working defaults, common practice, no source.
  */
-export function priorOf(subject: Subject, priors: Priors = {}): Prior {
+export function priorOf(subject: Subject, own: OwnOdds = {}): Prior {
 	const { origin, claimed, metal } = subject;
 	// a piece without a mark has nothing to be honest about, whatever it was said to be
 	const from: Origin = claimed === null ? 'unmarked' : origin;
-	const chosen = priors[from] ?? defaultPriors[from];
+	const chosen = own[from] ?? defaultPriors[from];
 	const total = hypotheses.reduce((sum, id) => sum + chosen[id], 0);
 	assert(total > 0, 'prior odds need a positive sum');
 	const share = (id: HypothesisId) => chosen[id] / total;

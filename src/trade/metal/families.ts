@@ -84,5 +84,5 @@ const FADES = 0.25;
  */
 export function claimOf(family: Family, perMille: number): { readonly bias: number; readonly limit: number } {
 	const fade = Math.min(1, (1 - perMille / 1000) / FADES);
-	return { bias: family.bias * fade, limit: family.limit * fade };
+	return { bias: fade === 0 ? 0 : family.bias * fade, limit: family.limit * fade };
 }

@@ -1,5 +1,6 @@
 import { beforeAll, describe, expect, it } from 'vitest';
-import { assess, startOf, type Assessment } from '../../../src/trade/evidence/assess.ts';
+import { assess, type Assessment } from '../../../src/trade/evidence/assess.ts';
+import { startOf } from '../../../src/trade/evidence/start.ts';
 import { hypotheses, type HypothesisId } from '../../../src/trade/evidence/belief.ts';
 import { strata } from '../../../src/trade/evidence/cores.ts';
 import type { Finding } from '../../../src/trade/evidence/finding.ts';

@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { assess, prudentFineness, startOf, type Assessment } from '../../../src/trade/evidence/assess.ts';
+import { assess, prudentFineness, type Assessment } from '../../../src/trade/evidence/assess.ts';
+import { startOf } from '../../../src/trade/evidence/start.ts';
 import type { Finding } from '../../../src/trade/evidence/finding.ts';
 import { defaultPriors } from '../../../src/trade/evidence/priors.ts';
 import type { Subject } from '../../../src/trade/evidence/subject.ts';

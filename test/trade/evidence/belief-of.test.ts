@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { beliefOf } from '../../../src/trade/evidence/belief-of.ts';
-import { assess, startOf } from '../../../src/trade/evidence/assess.ts';
+import { assess } from '../../../src/trade/evidence/assess.ts';
+import { startOf } from '../../../src/trade/evidence/start.ts';
 import { core, magnet, reading, stamped14, touch } from './some-findings.ts';
 
 describe('the belief that is kept', () => {

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { startOf } from '../../../src/trade/evidence/assess.ts';
+import { startOf } from '../../../src/trade/evidence/start.ts';
 import { contradictions, saysOf } from '../../../src/trade/evidence/contradiction.ts';
 import type { Finding } from '../../../src/trade/evidence/finding.ts';
 import { bar999, chain14, core, karat, magnet, reading, stamped14, touch, water } from './some-findings.ts';

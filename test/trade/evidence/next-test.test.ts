@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { assess, startOf } from '../../../src/trade/evidence/assess.ts';
+import { assess } from '../../../src/trade/evidence/assess.ts';
+import { startOf } from '../../../src/trade/evidence/start.ts';
 import { nextTests, testValue, type Possible } from '../../../src/trade/evidence/next-test.ts';
 import { bar999, chain14, core, reading, stamped14, touch, water } from './some-findings.ts';
 
