@@ -11,7 +11,7 @@ import {
 } from '../../../src/trade/lot/sums.ts';
 import { encodeSums } from '../../../src/trade/lot/sums-stored.ts';
 import { estimate, fineOf, netOf, type Piece } from '../../../src/trade/piece/piece.ts';
-import { anyPiece, pieceOf } from '../piece/some-pieces.ts';
+import { anyPiece, anyTestedPiece, pieceOf } from '../piece/some-pieces.ts';
 
 // a thousand lots take a while on a busy machine
 vi.setConfig({ testTimeout: 120_000 });
@@ -30,7 +30,7 @@ function textOf(sums: LotSums): string {
 }
 
 const onScale = (piece: Piece): Piece => ({ ...piece, weighing: { ...piece.weighing, scale: scale.id } });
-const lot = fc.array(fc.tuple(anyPiece, fc.boolean()).map(([piece, used]) => (used ? onScale(piece) : piece)), { maxLength: 4 });
+const lot = fc.array(fc.tuple(fc.oneof(anyPiece, anyTestedPiece), fc.boolean()).map(([piece, used]) => (used ? onScale(piece) : piece)), { maxLength: 4 });
 const entries = (pieces: readonly Piece[]) => pieces.map((piece, at) => ({ piece, key: `p${at}`, scale }));
 
 describe('the running sums of a lot', () => {
@@ -112,6 +112,33 @@ describe('the running sums of a lot', () => {
 		const own = (sums: LotSums) => estimateOf(sums, 'Au').contributions['pieces:Au']!;
 		expect(shared(forty) / shared(one)).toBeCloseTo(40, 6);
 		expect(own(forty) / own(one)).toBeCloseTo(Math.sqrt(40), 6);
+	});
+
+	it('expects what was found of the pieces, and takes what was decided', () => {
+		const believed = (mean: number, line = '14k chain 10.00 g'): Piece => ({
+			...pieceOf(line),
+			evidence: {
+				build: null,
+				findings: [],
+				belief: {
+					metal: 'Au', mean, low: mean - 3, median: mean, high: mean + 3, own: 2, shared: { reader: -4 },
+					odds: { honest: 1, under: 0, other: 0, layered: 0 }
+				},
+				taking: null
+			}
+		});
+		const forty = addPieces(emptySums(), Array.from({ length: 40 }, (_, at) => ({ piece: believed(580), key: `p${at}` })));
+		// 400 g at 14/24 were taken; at 580 ‰ they hold 232 g
+		expect(exactToText(forty.fine.Au!)).toBe('700/3');
+		const { value, contributions } = estimateOf(forty, 'Au');
+		expect(value).toBeCloseTo(232, 6);
+		// one tester read them all: 4 ‰ of 400 g; each piece by itself 2 ‰ of 10 g, and its reading
+		expect(contributions['tester:reader']).toBeCloseTo(-1.6, 9);
+		expect(contributions['pieces:Au']).toBeCloseTo(Math.sqrt(40) * Math.hypot(0.02, (0.01 / Math.sqrt(12)) * 0.58), 6);
+		expect(Object.keys(contributions).some((source) => source.startsWith('class:'))).toBe(false);
+		const mixed = addPiece(forty, pieceOf('14k chain 10.00 g'), 'q');
+		expect(estimateOf(mixed, 'Au').value).toBeCloseTo(232 + 10 * (14 / 24), 6);
+		expect(textOf(removePiece(mixed, pieceOf('14k chain 10.00 g'), 'q'))).toBe(textOf(forty));
 	});
 
 	it('a pure function: the sums given are not changed', () => {

@@ -82,6 +82,19 @@ describe('the estimate of a piece', () => {
 		expect(Object.keys(net.contributions)).not.toContain('scale:counter');
 	});
 
+	it('follows the belief where findings made one', () => {
+		const typed = pieceOf('14k chain 24.00 g');
+		const belief = {
+			metal: 'Au' as const, mean: 500, low: 4, median: 580, high: 585, odds: { honest: 0.8, under: 0, other: 0, layered: 0.2 },
+			shared: { reader: -3 }, own: 200
+		};
+		const { fine } = estimate({ ...typed, evidence: { build: null, findings: [], belief, taking: null } }, 'k');
+		expect(fine.Au?.value).toBeCloseTo(12, 12);
+		const expected = { 'reading:k': (0.01 / Math.sqrt(12)) * 0.5, 'tester:reader': -0.072, 'piece:k': 4.8 };
+		expect(Object.keys(fine.Au!.contributions).sort()).toEqual([...Object.keys(expected), 'deduction:k'].sort());
+		for (const [source, u] of Object.entries(expected)) expect(fine.Au!.contributions[source]).toBeCloseTo(u, 12);
+	});
+
 	it('takes the buyer\'s own spreads', () => {
 		const own = { 'us-modern': { shared: 0, own: 0.02 } };
 		const { fine } = estimate(pieceOf('14k chain 24.00 g'), 'k', undefined, own);

@@ -92,6 +92,28 @@ export const anyPiece: fc.Arbitrary<Piece> = fc
 	})
 	.filter((piece) => checkPiece(piece).ok);
 
+const perMille = fc.integer({ min: 0, max: 1_000_000 }).map((n) => n / 1000);
+
+/** A piece with something believed of it. */
+export const anyTestedPiece: fc.Arbitrary<Piece> = fc
+	.tuple(
+		anyPiece,
+		fc.record({
+			metal: fc.constantFrom<MetalId>('Au', 'Ag', 'Pt', 'Cu'),
+			mean: perMille,
+			low: perMille,
+			median: perMille,
+			high: perMille,
+			odds: fc.constant({ honest: 0.5, under: 0.2, other: 0.1, layered: 0.2 }),
+			shared: fc.dictionary(fc.constantFrom('x', 'acids'), fc.double({ min: -20, max: 20, noNaN: true })),
+			own: fc.double({ min: 0, max: 300, noNaN: true })
+		})
+	)
+	.map(([piece, belief]) => ({
+		...piece,
+		evidence: { build: null, findings: [{ kind: 'magnet' as const, id: 'm', at: 0, pull: 'none' as const }], belief, taking: null }
+	}));
+
 /** What nobody should type, and somebody will. */
 const NASTY = [
 	'', ' ', '\t', '\u0000', '\ufeff', '\u202e14k', '12,34', '1.234,5', '1,234', '1.234', '1e9', '1E-9', '-3', '\u22123', '+-3', '--3', '0', '-0', '0.0',
