@@ -38,6 +38,8 @@ const PACKAGES: Readonly<Record<string, readonly string[]>> = {
 	'workbox-precaching': ['service-worker'],
 	'workbox-routing': ['service-worker'],
 	'$service-worker': ['service-worker/index.ts'],
+	'd3-scale': ['src/ui'],
+	'd3-shape': ['src/ui'],
 	$app: ['src/routes', 'src/ui'],
 	svelte: ['src/routes', 'src/ui'],
 	'@sveltejs/kit': ['src/routes'],
