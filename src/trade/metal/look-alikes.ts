@@ -24,11 +24,11 @@ const of = (id: LookAlikeId, name: string, low: number, high: number, magnet: Lo
  */
 export const lookAlikes: readonly LookAlike[] = [
 	of('zinc', 'zinc die-cast', 6.5, 6.8),
-	of('tin', 'tin or pewter', 7.2, 7.5),
+	of('tin', 'tin', 7.2, 7.5),
 	of('steel', 'steel', 7.7, 8.0, 'some'),
 	of('brass', 'brass', 8.4, 8.75),
 	of('nickel-silver', 'nickel silver', 8.55, 8.85),
-	of('copper', 'copper or bronze', 8.75, 8.96),
+	of('copper', 'copper', 8.75, 8.96),
 	of('silver', 'silver', 10.3, 10.5),
 	of('lead', 'lead', 11.0, 11.35),
 	of('tungsten-alloy', 'tungsten heavy alloy', 17.0, 18.5),

@@ -38,7 +38,7 @@ export function saysWords(says: Says, metal: Subject['metal'], format: Format): 
 			const low = says.holds === null ? null : fineness(perMilleNumber(says.holds));
 			const high = says.attackedBy === null ? null : fineness(perMilleNumber(says.attackedBy));
 			if (low === null) return `the streak says less than ${high ?? ''}`;
-			return high === null ? `the streak says ${low} or more` : `the streak says ${low}, less than ${high}`;
+			return `the streak says ${low}${high === null ? ' or more' : ''}`;
 		}
 		case 'fluorescence':
 			return `the fluorescence reading says ${fineness(says.perMille)}`;
@@ -57,9 +57,17 @@ export function saysWords(says: Says, metal: Subject['metal'], format: Format): 
 	}
 }
 
-export function contradictionWords({ first, second }: Contradiction, metal: Subject['metal'], format: Format): string {
-	const words = `${saysWords(first, metal, format)}, ${saysWords(second, metal, format)}`;
-	return `${words.charAt(0).toUpperCase()}${words.slice(1)}.`;
+/** Those that one voice contradicts, in one sentence: "The streak says 14 kt, but the water says brass." */
+export function contradictionWords(clashes: readonly Contradiction[], metal: Subject['metal'], format: Format): string[] {
+	const against = new Map<string, string[]>();
+	for (const { first, second } of clashes) {
+		const voice = saysWords(second, metal, format);
+		against.set(voice, [...(against.get(voice) ?? []), saysWords(first, metal, format)]);
+	}
+	return [...against].map(([voice, others]) => {
+		const words = `${others.join(', ')}, but ${voice}.`;
+		return `${words.charAt(0).toUpperCase()}${words.slice(1)}`;
+	});
 }
 
 /** What no test done so far can see. */

@@ -13,6 +13,11 @@ describe('what no test so far can see', () => {
 		expect(of(start, [reading(998, { u: 1 }), water(19.28, 100), magnet('none')])).toEqual(['tungsten']);
 		expect(of(start, [reading(998, { u: 1 }), core(998, { u: 2 })])).toEqual([]);
 	});
+	it('is nothing that water or a cut has shown', () => {
+		const start = startOf({ ...stamped14, build: 'hollow' });
+		expect(of(start, [touch(), reading(588), water(8.6)])).not.toContain('brass');
+		expect(of(start, [touch(), reading(588), core(12)])).toEqual([]);
+	});
 	it('is everything under a 14 kt surface that only the surface was read of, and nothing after water', () => {
 		const start = startOf(stamped14);
 		expect(of(start, [reading(588)])).toEqual(expect.arrayContaining(['brass', 'copper', 'silver', 'steel']));
