@@ -23,19 +23,28 @@ export function densitiesOf(metal: MainMetal, perMille: number, limits = 1): Fam
 
 /**
  * Between what and what the fineness lies, for each colour family, when only the density is known: why a density seldom decides.
- * formula: all parts per thousand, in tenths, at which the family's range of density meets density ± u.
- * rounding: to a tenth of a part per thousand, outward by nothing.
+ * formula: all tenths of a part per thousand within which the family's range of density, with so many limits of its claim, meets density ± u.
+ * rounding: outward to a tenth of a part per thousand, so that nothing that is possible is left out.
  * source: metal/families.ts.
  */
-export function finenessesOf(metal: MainMetal, density: number, u: number, limits = 1): FamilySpan[] {
-	return familiesOf(metal).flatMap((family) => {
+export function finenessesOf(
+	metal: MainMetal,
+	density: number,
+	u: number,
+	limits = 1,
+	among: readonly Family[] = familiesOf(metal)
+): FamilySpan[] {
+	return among.flatMap((family) => {
 		let low = Infinity;
 		let high = -Infinity;
-		for (let tenth = 0; tenth <= 10_000; tenth += 1) {
-			const range = withClaim(family, tenth / 10, limits);
-			if (density + u < range.low || density - u > range.high) continue;
-			low = Math.min(low, tenth / 10);
-			high = Math.max(high, tenth / 10);
+		let before = withClaim(family, 0, limits);
+		for (let tenth = 1; tenth <= 10_000; tenth += 1) {
+			const after = withClaim(family, tenth / 10, limits);
+			if (density + u >= Math.min(before.low, after.low) && density - u <= Math.max(before.high, after.high)) {
+				low = Math.min(low, (tenth - 1) / 10);
+				high = tenth / 10;
+			}
+			before = after;
 		}
 		return low > high ? [] : [{ family: family.id, low, high }];
 	});

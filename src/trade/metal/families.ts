@@ -58,7 +58,8 @@ function cornerDensity(corner: Corner): number {
 	return idealDensity((Object.entries(corner) as [MetalId, number][]).map(([metal, share]) => ({ share, density: metals[metal].density })));
 }
 
-const BALANCES = new Map(families.map((family) => [family.id, family.corners.map(cornerDensity)]));
+/** Of the families in the table, worked out once; any other family is worked out when it is asked for. */
+const BALANCES = new Map(families.map((family) => [family, family.corners.map(cornerDensity)]));
 
 /**
  * Between what and what the density of a family lies at one fineness, volumes adding up.
@@ -69,7 +70,8 @@ const BALANCES = new Map(families.map((family) => [family.id, family.corners.map
  */
 export function densityRange(family: Family, perMille: number): { readonly low: number; readonly high: number } {
 	const share = perMille / 1000;
-	const all = BALANCES.get(family.id)!.map((rest) => 1 / (share / metals[family.metal].density + (1 - share) / rest));
+	const balances = BALANCES.get(family) ?? family.corners.map(cornerDensity);
+	const all = balances.map((rest) => 1 / (share / metals[family.metal].density + (1 - share) / rest));
 	return { low: Math.min(...all), high: Math.max(...all) };
 }
 

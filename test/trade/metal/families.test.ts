@@ -33,6 +33,13 @@ describe('what the balance is made of', () => {
 		}
 	});
 
+	it('works out a family that is not in the table', () => {
+		const alone = { ...families[0]!, corners: [{ Ag: 1 }, { Cu: 1 }] };
+		const { low, high } = densityRange(alone, 500);
+		expect(low).toBeCloseTo(1 / (0.5 / metals.Au.density + 0.5 / metals.Cu.density), 12);
+		expect(high).toBeCloseTo(1 / (0.5 / metals.Au.density + 0.5 / metals.Ag.density), 12);
+	});
+
 	it('orders 14 kt: white with nickel is light, white with palladium heavy, red lighter than yellow than green', () => {
 		const middle = (id: string) => {
 			const { low, high } = densityRange(families.find((family) => family.id === id)!, 585);
