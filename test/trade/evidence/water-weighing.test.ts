@@ -1,9 +1,10 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { densityByWater } from '../../../src/trade/evidence/water-weighing.ts';
+import { densityByWater, waterDoubts } from '../../../src/trade/evidence/water-weighing.ts';
 import { standardUncertainty } from '../../../src/trade/uncertainty/uncertain.ts';
 import { decimal } from '../../../src/trade/number/decimal.ts';
-import { water } from './some-findings.ts';
+import { waterDensity } from '../../../src/trade/evidence/water.ts';
+import { seeded, water } from './some-findings.ts';
 
 function of(...args: Parameters<typeof water>) {
 	const found = densityByWater(water(...args));
@@ -32,7 +33,8 @@ describe('weighing in water', () => {
 		expect(ring.leastGrams).toBeLessThan(8);
 		expect(ring.leastDivision).toBe(0.002);
 		expect(of(13.1, 2, { division: decimal('0.001') }).useful).toBe(true);
-		expect(of(13.1, 4.9).useful).toBe(false);
+		expect(of(13, 5).useful).toBe(false);
+		expect(of(13.1, 5).useful).toBe(false);
 		expect(of(13.1, 20).useful).toBe(true);
 		expect(of(13.1, ring.leastGrams * 1.05).useful).toBe(true);
 		expect(of(13.1, ring.leastGrams * 0.95).useful).toBe(false);
@@ -40,14 +42,57 @@ describe('weighing in water', () => {
 		expect(of(13.1, 0.3, { division: decimal('0.0001') }).leastDivision).toBe(0);
 	});
 
-	it('agrees with the doubt of a thousand weighings by dice', () => {
-		const { density } = of(13.1, 20);
-		const u = standardUncertainty(density);
-		// lift 1.5226 g: √(1/12)/100 twice of it, and 0.5 mm³; mostly the lift's own relative doubt
-		const lift = 20 * (0.998207 - 0.0012) / (13.1 - 0.0012);
-		const expected = 13.1 * Math.hypot(0.01 / Math.sqrt(6) / lift, 0.0005 / lift);
-		expect(Math.abs(u / expected - 1)).toBeLessThan(0.06);
-		expect(Object.keys(density.contributions).sort()).toEqual(['air', 'bubble', 'temperature', 'water']);
+	it.each(['suspended', 'beaker'] as const)('agrees with the scatter of twenty thousand simulated weighings, %s', (method) => {
+		const [grams, truth, division] = [6, 13.1, 0.01];
+		const dice = seeded(method === 'beaker' ? 11 : 7);
+		const bell = () => Math.sqrt(-2 * Math.log(1 - dice())) * Math.cos(2 * Math.PI * dice());
+		const step = () => division * (dice() - 0.5);
+		const liquid = (celsius: number) => {
+			const found = waterDensity(celsius);
+			if (!found.ok) throw new Error(found.problem.kind);
+			return found.value;
+		};
+		const lift = (grams * (liquid(20) - 0.0012)) / (truth - 0.0012);
+		const found: number[] = [];
+		for (let round = 0; round < 20_000; round += 1) {
+			const bubble = bell() * waterDoubts.bubble * 0.001;
+			const inAir = grams + step();
+			const up = lift + bubble * liquid(20) + (method === 'beaker' ? step() - step() : inAir - grams - step());
+			found.push((inAir * (liquid(20 + bell() * waterDoubts.temperatureU) - 0.0012)) / up + 0.0012);
+		}
+		const mean = found.reduce((sum, x) => sum + x, 0) / found.length;
+		const scatter = Math.sqrt(found.reduce((sum, x) => sum + (x - mean) ** 2, 0) / (found.length - 1));
+		const reading = method === 'beaker' ? lift : grams - lift;
+		const exact = densityByWater({
+			method, air: decimal('6'), water: decimal(reading.toFixed(9)), division: decimal('0.01'), temperature: decimal('20')
+		});
+		if (!exact.ok) throw new Error(exact.problem.kind);
+		expect(exact.value.density.value).toBeCloseTo(truth, 6);
+		expect(Object.keys(exact.value.density.contributions).sort()).toEqual(['air', 'bubble', 'temperature', 'water']);
+		expect(Math.abs(standardUncertainty(exact.value.density) / scatter - 1)).toBeLessThan(0.02);
+	});
+
+	it('takes the doubts that it is given, each for itself', () => {
+		const twice = densityByWater(water(13.1, 20), { temperatureU: 2 * waterDoubts.temperatureU, bubble: 2 * waterDoubts.bubble });
+		const once = of(13.1, 20).density.contributions;
+		if (!twice.ok) throw new Error(twice.problem.kind);
+		expect(twice.value.density.contributions.bubble).toBeCloseTo(2 * once.bubble!, 12);
+		expect(twice.value.density.contributions.temperature).toBeCloseTo(2 * once.temperature!, 12);
+		expect(twice.value.density.contributions.water).toBe(once.water);
+		const none = densityByWater(water(13.1, 20), { temperatureU: 0, bubble: 0 });
+		expect(none.ok && Math.abs(none.value.density.contributions.bubble!)).toBe(0);
+	});
+
+	it('carries the temperature with its whole slope and its sign, at the ends of the table as within', () => {
+		const at = (celsius: string) => {
+			const found = hung('20', '18.47', { temperature: decimal(celsius) });
+			if (!found.ok) throw new Error(found.problem.kind);
+			return found.value.density.contributions.temperature! / found.value.density.value;
+		};
+		// water at 40 °C loses 0.38 parts in a thousand per degree, at 20 °C 0.21; below 4 °C it gains
+		expect(at('40')).toBeCloseTo(-0.000385, 5);
+		expect(at('20')).toBeCloseTo(-0.000207, 5);
+		expect(at('0')).toBeCloseTo(0.000068, 5);
 	});
 
 	it('refuses what cannot be', () => {
