@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { allOf, densitiesOf } from '../../src/trade/evidence/density-range.ts';
 import { alloy, commonAlloys, finenessIn, type Share } from '../../src/trade/metal/alloy.ts';
 import { densityOf, idealDensity } from '../../src/trade/metal/density.ts';
 import { perMilleNumber } from '../../src/trade/metal/fineness.ts';
@@ -153,5 +154,35 @@ describe('elements', () => {
 	it('pure metals carry no claim of mixing', () => {
 		expect(Object.keys(densityOf({ shares: [{ metal: 'Au', share: ratio(1n, 1n) }] }).contributions)).toEqual(['density:Au']);
 		expect(toNumber(ratio(1n, 1n))).toBe(1);
+	});
+});
+
+/**
+ * Source: a printed table of densities of jewellery metals, "approximate": 9 ct 10.9 to 12.7, 14 ct 12.9 to 14.6, 18 ct yellow 15.2 to 15.9, 18 ct
+ * white 14.7 to 16.9, 22 ct 17.7 to 17.8, 950 platinum 20.1; and the casting-house table above for red gold; handbook sheets for sterling.
+ */
+describe('colour families against printed ranges', () => {
+	const spans = (metal: 'Au' | 'Ag' | 'Pt', perMille: number, ids?: readonly string[]) =>
+		allOf(densitiesOf(metal, perMille).filter(({ family }) => ids === undefined || ids.includes(family)))!;
+	it.each([
+		['9 ct', 'Au', 375, undefined, 10.9, 12.7],
+		['14 ct', 'Au', 585, undefined, 12.9, 14.6],
+		['18 ct yellow', 'Au', 750, ['yellow'], 15.2, 15.9],
+		['18 ct white', 'Au', 750, ['white-nickel', 'white-palladium'], 14.7, 16.9],
+		['18 ct red', 'Au', 750, ['red'], 15.18, 15.18],
+		['14 ct red', 'Au', 583, ['red'], 13.26, 13.26],
+		['22 ct', 'Au', 917, ['yellow', 'red'], 17.7, 17.8],
+		['sterling', 'Ag', 925, undefined, 10.36, 10.36],
+		['950 platinum', 'Pt', 950, undefined, 20.1, 20.1]
+	] as const)('%s lies within the families and their claim', (_, metal, perMille, ids, low, high) => {
+		const range = spans(metal, perMille, ids);
+		expect(range.low).toBeLessThanOrEqual(low);
+		expect(range.high).toBeGreaterThanOrEqual(high);
+	});
+	it('and the ranges are no wider than they must be: 14 kt is never 9 ct, 18 ct never 22 ct', () => {
+		const yellows = ['yellow', 'red', 'green'];
+		expect(spans('Au', 585, ['yellow']).low).toBeGreaterThan(spans('Au', 375, ['yellow']).high);
+		expect(spans('Au', 917, yellows).low).toBeGreaterThan(spans('Au', 750, yellows).high);
+		expect(spans('Ag', 925).high - spans('Ag', 925).low).toBeLessThan(0.1);
 	});
 });
