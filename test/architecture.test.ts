@@ -34,6 +34,7 @@ const HOUSES: Readonly<Record<string, readonly string[]>> = {
 const PACKAGES: Readonly<Record<string, readonly string[]>> = {
 	'decimal.js': ['src/trade/number'],
 	dexie: ['src/storage'],
+	'fft.js': ['src/trade/lot'],
 	'workbox-window': ['src/ui/update'],
 	'workbox-precaching': ['service-worker'],
 	'workbox-routing': ['service-worker'],

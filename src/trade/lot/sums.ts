@@ -154,7 +154,8 @@ function nanograms(grams: number): bigint {
 	return BigInt(Math.round(grams * 1e9));
 }
 
-const SHARED = /^(?:scale|class|tester):/;
+/** The sources whose errors are the same in several pieces, and so add up with their sign. */
+export const SHARED = /^(?:scale|class|tester):/;
 
 function moveErrors(work: Working, { net, fine }: Estimate, sign: 1 | -1): void {
 	const quantities: [Quantity, Uncertain][] = [['net', net], ...(Object.entries(fine) as [MetalId, Uncertain][])];
