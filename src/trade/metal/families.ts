@@ -25,15 +25,16 @@ const redToGreen = (leastSilver: number, mostSilver: number, mostZinc: number): 
  * formula: shares of the balance: yellow Ag:(Ag+Cu) 25 to 80 %, zinc up to 20 %; red up to 30 % silver, zinc up to 12 %; green 80 % silver and more;
  * white with nickel 20 to 55 %, zinc 10 to 30 %, rest copper; white with palladium 30 to 70 %, copper up to 20 %, rest silver.
  * rounding: none.
- * source: common practice, no source; limits of ideal mixing as in metal/density.ts.
+ * source: common practice, no source; limits of ideal mixing as in metal/density.ts: red covers gold with copper alone and gold with silver and
+ * copper, green gold with silver alone and with both. What zinc adds to yellow, red and silver is not in their limits.
  */
 export const families: readonly Family[] = [
 	{ id: 'yellow', metal: 'Au', weight: 0.62, corners: redToGreen(0.25, 0.8, 0.2), bias: 0, limit: 0.01 },
 	{
-		id: 'red', metal: 'Au', weight: 0.13, bias: -0.007, limit: 0.005,
+		id: 'red', metal: 'Au', weight: 0.13, bias: -0.001, limit: 0.011,
 		corners: [{ Cu: 1 }, { Ag: 0.3, Cu: 0.7 }, { Cu: 0.88, Zn: 0.12 }, { Ag: 0.3, Cu: 0.58, Zn: 0.12 }]
 	},
-	{ id: 'green', metal: 'Au', weight: 0.05, corners: [{ Ag: 1 }, { Ag: 0.8, Cu: 0.2 }], bias: 0, limit: 0.008 },
+	{ id: 'green', metal: 'Au', weight: 0.05, corners: [{ Ag: 1 }, { Ag: 0.8, Cu: 0.2 }], bias: 0, limit: 0.01 },
 	{
 		id: 'white-nickel', metal: 'Au', weight: 0.1, bias: 0.02, limit: 0.02,
 		corners: [{ Ni: 0.2, Zn: 0.1, Cu: 0.7 }, { Ni: 0.2, Zn: 0.3, Cu: 0.5 }, { Ni: 0.55, Zn: 0.1, Cu: 0.35 }, { Ni: 0.55, Zn: 0.3, Cu: 0.15 }]
@@ -75,16 +76,23 @@ export function densityRange(family: Family, perMille: number): { readonly low: 
 	return { low: Math.min(...all), high: Math.max(...all) };
 }
 
-/** Under this share of balance the claim of a family fades: the pure metal has no bias. */
-const FADES = 0.25;
+/** How far from a pure metal an alloy of this share of the main metal is, with the balance at one corner: 0 pure, 1 halves by atoms. */
+function mixedness(metal: MetalId, share: number, corner: Corner): number {
+	const atoms = [
+		share / metals[metal].atomicMass,
+		...(Object.entries(corner) as [MetalId, number][]).map(([other, part]) => ((1 - share) * part) / metals[other].atomicMass)
+	];
+	const all = atoms.reduce((sum, n) => sum + n, 0);
+	return 2 * (1 - atoms.reduce((sum, n) => sum + (n / all) ** 2, 0));
+}
 
 /**
  * The honest claim of ideal mixing for a family at one fineness.
- * formula: bias and limit of the family x min(1, balance / 25 %).
+ * formula: bias and limit of the family x the most over its corners of min(1, 2 (1 − sum of squared shares by atoms)), as in metal/density.ts.
  * rounding: none.
  * source: family figures from measured alloys (working values of ours); the fading toward the pure metal is our own choice.
  */
 export function claimOf(family: Family, perMille: number): { readonly bias: number; readonly limit: number } {
-	const fade = Math.min(1, (1 - perMille / 1000) / FADES);
-	return { bias: fade === 0 ? 0 : family.bias * fade, limit: family.limit * fade };
+	const fade = Math.min(1, Math.max(...family.corners.map((corner) => mixedness(family.metal, perMille / 1000, corner))));
+	return fade > 0 ? { bias: family.bias * fade, limit: family.limit * fade } : { bias: 0, limit: 0 };
 }

@@ -1,7 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import { claimOf, densityRange, families, familiesOf } from '../../../src/trade/metal/families.ts';
-import { idealDensity } from '../../../src/trade/metal/density.ts';
-import { metals } from '../../../src/trade/metal/metals.ts';
+import { idealDensity, mixingClaim } from '../../../src/trade/metal/density.ts';
+import { decimal } from '../../../src/trade/number/decimal.ts';
+import { ratio } from '../../../src/trade/number/exact.ts';
+import { metals, type MetalId } from '../../../src/trade/metal/metals.ts';
 
 describe('what the balance is made of', () => {
 	it('has corners that are whole', () => {
@@ -49,11 +51,35 @@ describe('what the balance is made of', () => {
 		expect([...order].sort((a, b) => middle(a) - middle(b))).toEqual(order);
 	});
 
+	it('claims as much as the claim of each alloy that it covers, as long as no zinc is in it', () => {
+		let seen = 0;
+		for (const family of families.filter(({ metal }) => metal !== 'Pt' && metal !== 'Pd')) {
+			for (const corner of family.corners.filter(({ Zn = 0 }) => Zn === 0 || family.id === 'white-nickel')) {
+				for (const perMille of [375, 585, 750, 917, 990]) {
+					const balance = Object.entries(corner) as [MetalId, number][];
+					const parts: [MetalId, number][] = [[family.metal, perMille], ...balance.map(([metal, share]): [MetalId, number] => [metal, (1000 - perMille) * share])];
+					const alloyed = mixingClaim(parts.map(([metal, of]) => ({ metal, share: ratio(decimal(of.toFixed(6)), 1000n) })));
+					const { bias, limit } = claimOf(family, perMille);
+					expect(bias - limit, `${family.id} ${perMille}`).toBeLessThanOrEqual(alloyed.bias - alloyed.limit + 1e-6);
+					expect(bias + limit, `${family.id} ${perMille}`).toBeGreaterThanOrEqual(alloyed.bias + alloyed.limit - 1e-6);
+					seen += 1;
+				}
+			}
+		}
+		expect(seen).toBeGreaterThan(60);
+	});
+
 	it('claims less the purer the alloy, and nothing of the pure metal', () => {
 		for (const family of families) {
 			expect(claimOf(family, 1000)).toEqual({ bias: 0, limit: 0 });
-			expect(claimOf(family, 585)).toEqual({ bias: family.bias, limit: family.limit });
-			expect(claimOf(family, 900).limit).toBeCloseTo(family.limit * 0.4, 12);
+			// whole at equal atoms; platinum with palladium is nearly there
+			const { bias, limit } = claimOf(family, 585);
+			expect(limit).toBeLessThanOrEqual(family.limit);
+			expect(limit).toBeGreaterThan(0.98 * family.limit);
+			expect(bias).toBeCloseTo((family.bias * limit) / family.limit, 12);
+			const falling = [585, 900, 950, 990, 999].map((perMille) => claimOf(family, perMille).limit);
+			expect([...falling].sort((a, b) => b - a)).toEqual(falling);
+			expect(claimOf(family, 990).limit).toBeLessThan(0.25 * family.limit);
 			const { low, high } = densityRange(family, 1000);
 			expect([low, high]).toEqual([metals[family.metal].density, metals[family.metal].density]);
 		}
