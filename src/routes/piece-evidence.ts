@@ -4,6 +4,7 @@ import type { Evidence } from '$trade/evidence/belief.ts';
 import { contradictions, type Contradiction } from '$trade/evidence/contradiction.ts';
 import { findingKinds, type FindingKind } from '$trade/evidence/finding.ts';
 import { nextTests, type Possible, type Stake, type TestValue } from '$trade/evidence/next-test.ts';
+import { observeAll } from '$trade/evidence/observe.ts';
 import { pooledDensities, type Density } from '$trade/evidence/pool.ts';
 import { startOf, type Start } from '$trade/evidence/start.ts';
 import { testCost } from '$trade/evidence/test-costs.ts';
@@ -37,6 +38,8 @@ export type View = {
 	readonly unseen: readonly LookAlikeId[];
 	/** Together, the odds of what no test has seen. */
 	readonly unseenOdds: number;
+	/** Some finding says something: not one that was too light for its scale. */
+	readonly tested: boolean;
 	readonly prudent: number;
 	readonly densities: readonly Density[];
 };
@@ -54,6 +57,7 @@ export function viewOf(piece: Piece, { priors, prudence }: SettingsBody): View |
 		clashes: contradictions(start, findings),
 		unseen,
 		unseenOdds: found.cores.reduce((sum, { core, odds }) => sum + (unseen.includes(core) ? odds : 0), 0),
+		tested: observeAll(start, findings).length > 0,
 		prudent: prudentFineness(found, prudence),
 		densities: pooledDensities(findings.flatMap((finding) => (finding.kind === 'water' ? (usefulDensity(finding) ?? []) : [])))
 	};

@@ -40,6 +40,8 @@ export function sourceWords(source: string, shop: Shop): string {
 			return `how far this class runs from its mark: ${className(about)}`;
 		case 'scale':
 			return `the scale ${shop.scales.find(({ id }) => id === about)?.name ?? ''}, shared by everything weighed on it`;
+		case 'tester':
+			return `the own error of ${shop.testers.find(({ id }) => id === about)?.name ?? 'a tester that is gone'}, shared by all that it read`;
 		case 'pieces':
 			return 'each piece by itself: reading, deductions, its own fineness';
 		case 'price':

@@ -15,7 +15,19 @@ export function pieceHow(piece: Piece, format: Format): string {
 	const deductions = totalDeduction(piece.deductions).grams;
 	const kinds = [...new Set(piece.deductions.map(({ what }) => what))].join(', ');
 	const mass = format.weighing(piece.weighing) + (deductions.isZero() ? '' : ` − ${format.mass(deductions, 'g', { least: 0, most: 3 })} ${kinds}`);
-	return [mass, takenAt(piece, format), piece.moreThanMelt ? 'worth more than melt' : ''].filter((part) => part !== '').join(' · ');
+	return [mass, takenAt(piece, format), testedWords(piece, format), piece.moreThanMelt ? 'worth more than melt' : ''].filter((part) => part !== '').join(' · ');
+}
+
+/** From here on a piece is said to be in doubt wherever it is shown. */
+const DOUBTFUL = 0.05;
+
+/** "4 tests", and the odds of a layer where they are more than a few in a hundred; nothing where nothing was tested. */
+export function testedWords({ evidence }: Pick<Piece, 'evidence'>, format: Format): string {
+	const count = evidence?.findings.length ?? 0;
+	if (count === 0) return '';
+	const layered = evidence?.belief?.odds.layered ?? 0;
+	const doubt = layered > DOUBTFUL ? `, ${format.chance(layered)} filled` : '';
+	return `${format.count(count)} ${count === 1 ? 'test' : 'tests'}${doubt}`;
 }
 
 /** "taken at 585 ‰" for one metal, "Au 625 Pd 180 Ag 120 ‰" for several, "no metal counted" for none. */

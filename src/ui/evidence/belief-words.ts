@@ -8,13 +8,16 @@ import type { Format } from '../format.ts';
 import { karatWords } from './karat-words.ts';
 
 /** What is believed, in one sentence a colleague would say. */
-export function verdict(subject: Subject, found: Assessment, format: Format): string {
+export function verdict(subject: Subject, found: Assessment, tested: boolean, format: Format): string {
 	const { odds, low, high } = found;
 	const between = `${format.interval(low, high, '‰', 0)}`;
 	if (odds.layered > 0.9) return 'This is a layer over something else: it is worth next to nothing as metal, whatever its surface says.';
 	if (odds.layered > 0.1) return `It may be filled: ${format.chance(odds.layered)} for a layer over something else. Do not pay for it before you know.`;
-	if (subject.claimed === null) return `Without a mark it is what the tests say: ${between}, nine times in ten.`;
+	if (subject.claimed === null) {
+		return tested ? `Without a mark it is what the tests say: ${between}, nine times in ten.` : 'It has no mark and no test: it may be anything.';
+	}
 	const mark = karatWords(subject.claimed, subject.metal, format);
+	if (!tested) return `By its mark alone, untested: ${mark}, ${between}, nine times in ten.`;
 	if (odds.other > 0.5) return `It is not ${mark}, it is another standard: ${between}, nine times in ten.`;
 	if (odds.under > 0.5) return `It runs under its mark: ${between}, nine times in ten.`;
 	if (odds.honest > 0.9) return `It is what its mark says, ${mark}: ${between}, nine times in ten.`;

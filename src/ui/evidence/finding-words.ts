@@ -75,9 +75,12 @@ function waterWords(finding: Extract<Finding, { kind: 'water' }>, format: Format
 	const u = standardUncertainty(density);
 	const what = `Water weighing: ${format.estimate(density.value, 4)} ± ${format.estimate(u, 1)}\u00a0g/cm³`;
 	if (useful) return { what, how, mute: '' };
-	const scale = leastDivision === 0 ? '' : `, or a scale with steps of ${format.estimate(leastDivision, 1)}\u00a0g`;
+	const help = [
+		Number.isFinite(leastGrams) ? `at least ${format.estimate(Math.ceil(leastGrams), 3)}\u00a0g of pieces alike` : '',
+		leastDivision === 0 ? '' : `a scale with steps of ${format.estimate(leastDivision, 1)}\u00a0g`
+	].filter((part) => part !== '');
 	const mute =
 		`Too light for this scale to say anything of the fineness: the step of ${format.mass(finding.division)} alone makes the density doubtful by ` +
-		`${format.estimate((100 * u) / density.value, 2)}\u00a0%. What would help: at least ${format.estimate(Math.ceil(leastGrams), 3)}\u00a0g of pieces alike${scale}.`;
+		`${format.estimate((100 * u) / density.value, 2)}\u00a0%. What would help: ${help.length === 0 ? 'another test' : help.join(', or ')}.`;
 	return { what, how, mute };
 }
