@@ -70,7 +70,7 @@ export function priorOf(subject: Subject, own: OwnOdds = {}): Prior {
 			honest: bellPrior(tolerance === 0 ? mark + ABOVE : mark - OF_TOLERANCE * tolerance, Math.max(LEAST_SCATTER, OF_TOLERANCE * tolerance)),
 			under: exponentialDown(legal, SHORTFALL[from]),
 			other: otherStandards(metal, claimed),
-			layered: exponentialUp(UNDER_LAYER)
+			layered: UNDER_ANY_LAYER
 		}
 	};
 }
@@ -78,8 +78,13 @@ export function priorOf(subject: Subject, own: OwnOdds = {}): Prior {
 /** Falls off below a fineness; what would be below nothing stands at nothing. */
 function exponentialDown(from: number, mean: number): Vector {
 	const values = new Float64Array(CELLS);
-	const below = (perMille: number) => (perMille >= from ? 1 : Math.exp((perMille - from) / mean));
-	for (let cell = 0; cell < CELLS; cell += 1) values[cell] = below(cellHigh(cell)) - (cell === 0 ? 0 : below(cellLow(cell)));
+	let below = 0;
+	for (let cell = 0; cell < CELLS; cell += 1) {
+		const high = cellHigh(cell);
+		const above = high >= from ? 1 : Math.exp((high - from) / mean);
+		values[cell] = above - below;
+		below = above;
+	}
 	return normalised(values);
 }
 
@@ -89,10 +94,22 @@ function exponentialUp(mean: number): Vector {
 	return normalised(values);
 }
 
+/** What lies under a layer is the same for every piece. */
+const UNDER_ANY_LAYER = exponentialUp(UNDER_LAYER);
+
 const NEARNESS = 150;
 const LOWER = 3;
 const SCATTER = 4;
 const ANYTHING = 0.03;
+
+/** The bell about a standard never changes; it is worked out once. */
+const BELLS = new Map<number, Vector>();
+
+function standardBell(perMille: number): Vector {
+	const bell = BELLS.get(perMille) ?? bellPrior(perMille, SCATTER);
+	BELLS.set(perMille, bell);
+	return bell;
+}
 
 function otherStandards(metal: MainMetal, claimed: number | null): Vector {
 	const values = new Float64Array(CELLS);
@@ -103,7 +120,7 @@ function otherStandards(metal: MainMetal, claimed: number | null): Vector {
 		if (claimed !== null && gap < 3) continue;
 		const weight = claimed === null ? common : Math.exp(-gap / NEARNESS) * (perMille < claimed ? LOWER : 1);
 		total += weight;
-		const bell = bellPrior(perMille, SCATTER);
+		const bell = standardBell(perMille);
 		for (let cell = 0; cell < CELLS; cell += 1) values[cell]! += weight * bell[cell]!;
 	}
 	assert(total > 0, `no other standard of ${metal} is known`);

@@ -18,10 +18,13 @@ export function touchObservation(finding: Pick<Touch, 'how' | 'holds' | 'attacke
 	const holds = finding.holds === null ? null : perMilleNumber(finding.holds) - u;
 	const attackedBy = finding.attackedBy === null ? null : perMilleNumber(finding.attackedBy) - u;
 	const misread = gross / (holds === null || attackedBy === null ? 2 : 3);
+	// so far out the bell adds nothing to one, nor to the chance of a misreading
+	const deep = misread > 0.001 ? -9 : -Infinity;
+	const share = (z: number) => (z > 9 ? 1 : z < deep ? 0 : normalCdf(z));
 	const values = new Float64Array(CELLS);
 	for (let cell = 0; cell < CELLS; cell += 1) {
-		const over = attackedBy === null ? 1 : normalCdf((attackedBy - cell) / u);
-		const under = holds === null ? 0 : normalCdf((holds - cell) / u);
+		const over = attackedBy === null ? 1 : share((attackedBy - cell) / u);
+		const under = holds === null ? 0 : share((holds - cell) / u);
 		values[cell] = (1 - gross) * Math.max(0, over - under) + misread;
 	}
 	return { streak: { how, values } };

@@ -26,33 +26,41 @@ const ANY_DENSITY = 1 / 24;
 const BELIEVED = 0.97;
 const BALANCE_U = 0.006;
 
+/** Beyond this many standard deviations a family has no part in a reading. */
+const REACH = 9;
+/** The share below z; so far out nothing is left above it that a number could hold. */
+const shareBelow = (z: number): number => (z > REACH ? 1 : normalCdf(z));
+
 /** The chance of a density reading per g/cm³ when the truth lies evenly between two densities and the reading has a bell's error. */
 export function evenly(density: number, low: number, high: number, u: number): number {
 	if (high - low < u / 50) {
 		const z = (density - (low + high) / 2) / u;
 		return Math.exp((-z * z) / 2) / (u * Math.sqrt(2 * Math.PI));
 	}
-	return (normalCdf((density - low) / u) - normalCdf((density - high) / u)) / (high - low);
+	const below = shareBelow((density - low) / u);
+	const z = (density - high) / u;
+	// what the bell leaves above is lost in the last digit of a share that is no longer small
+	return (z < -REACH && below > 0.001 ? below : below - shareBelow(z)) / (high - low);
 }
 
-type Range = { readonly low: number; readonly high: number; readonly limit: number };
+type Ranges = { readonly low: Vector; readonly high: Vector; readonly limit: Vector };
 /** The densities of a family by fineness never change; they are worked out once. */
-const RANGES = new Map<string, readonly Range[]>();
+const RANGES = new Map<string, Ranges>();
 
-function rangesOf(family: ReturnType<typeof familiesOf>[number]): readonly Range[] {
+function rangesOf(family: ReturnType<typeof familiesOf>[number]): Ranges {
 	const known = RANGES.get(family.id);
 	if (known !== undefined) return known;
-	const made = Array.from({ length: CELLS }, (_, perMille): Range => {
-		const { low, high } = densityRange(family, perMille);
-		const { bias, limit } = claimOf(family, perMille);
-		return { low: low * (1 + bias), high: high * (1 + bias), limit };
-	});
+	const made = { low: new Float64Array(CELLS), high: new Float64Array(CELLS), limit: new Float64Array(CELLS) };
+	for (let cell = 0; cell < CELLS; cell += 1) {
+		const { low, high } = densityRange(family, cell);
+		const { bias, limit } = claimOf(family, cell);
+		made.low[cell] = low * (1 + bias);
+		made.high[cell] = high * (1 + bias);
+		made.limit[cell] = limit;
+	}
 	RANGES.set(family.id, made);
 	return made;
 }
-
-/** Beyond this many standard deviations a family has no part in a reading. */
-const REACH = 9;
 
 /**
  * How likely a density is for a piece of one alloy, by its fineness.
@@ -67,18 +75,22 @@ export function solidDensity(density: number, u: number, metal: MainMetal, balan
 	const total = families.reduce((sum, { weight }) => sum + weight, 0);
 	const share = (balance === null ? 1 : 1 - BELIEVED) / total;
 	for (const family of families) {
-		rangesOf(family).forEach(({ low, high, limit }, cell) => {
-			const all = Math.hypot(u, (limit * density) / Math.sqrt(3));
-			if (density < low - REACH * all || density > high + REACH * all) return;
-			values[cell]! += family.weight * share * evenly(density, low, high, all);
-		});
+		const { low, high, limit } = rangesOf(family);
+		for (let cell = 0; cell < CELLS; cell += 1) {
+			const mixing = (limit[cell]! * density) / Math.sqrt(3);
+			const all = Math.sqrt(u * u + mixing * mixing);
+			if (density < low[cell]! - REACH * all || density > high[cell]! + REACH * all) continue;
+			values[cell]! += family.weight * share * evenly(density, low[cell]!, high[cell]!, all);
+		}
 	}
 	if (balance === null) return values;
 	const rest = idealDensity(balance.map((part) => ({ share: part.share, density: metals[part.metal].density })));
+	const limits = families.map((family) => rangesOf(family).limit);
 	for (let cell = 0; cell < CELLS; cell += 1) {
-		const ideal = idealDensity([{ share: cell / 1000, density: metals[metal].density }, { share: 1 - cell / 1000, density: rest }]);
-		const limit = Math.min(...families.map((family) => rangesOf(family)[cell]!.limit));
-		const all = Math.hypot(u, (limit * density) / Math.sqrt(3), BALANCE_U * (1 - cell / 1000) * ideal);
+		const ideal = 1 / (cell / 1000 / metals[metal].density + (1 - cell / 1000) / rest);
+		const mixing = (limits.reduce((least, limit) => Math.min(least, limit[cell]!), 1) * density) / Math.sqrt(3);
+		const balanceU = BALANCE_U * (1 - cell / 1000) * ideal;
+		const all = Math.sqrt(u * u + mixing * mixing + balanceU * balanceU);
 		if (Math.abs(density - ideal) < REACH * all) values[cell]! += BELIEVED * evenly(density, ideal, ideal, all);
 	}
 	return values;
@@ -94,11 +106,13 @@ function coreDensity(core: LookAlikeId, density: number, u: number, metal: MainM
 }
 
 /** An honest piece that weighs too light: the shortfall is exponential, up to nearly all of the density. */
-function tooLight(density: number, truth: number, build: Build): number {
+function tooLight(density: number, build: Build): (truth: number) => number {
 	const { share } = INNOCENT[build];
-	const short = (truth - density) / truth;
-	if (short < 0 || short > 0.95) return 0;
-	return Math.exp(-short / share) / (share * truth * (1 - Math.exp(-0.95 / share)));
+	const whole = share * (1 - Math.exp(-0.95 / share));
+	return (truth) => {
+		const short = (truth - density) / truth;
+		return short < 0 || short > 0.95 ? 0 : Math.exp(-short / share) / (whole * truth);
+	};
 }
 
 /**
@@ -116,11 +130,11 @@ export function densityObservation(
 ): Observation {
 	const { chance } = INNOCENT[of.build];
 	const solid = solidDensity(density, u, of.metal, balance);
-	const middle = familiesOf(of.metal)[0]!;
-	const ranges = rangesOf(middle);
-	const mix = (as: number, truth: number) =>
-		(1 - SLIP) * ((1 - chance) * as + chance * tooLight(density, truth, of.build)) + SLIP * ANY_DENSITY;
-	const values = solid.map((as, cell) => mix(as, (ranges[cell]!.low + ranges[cell]!.high) / 2));
+	const { low: lows, high: highs } = rangesOf(familiesOf(of.metal)[0]!);
+	const light = tooLight(density, of.build);
+	const mix = (as: number, truth: number) => (1 - SLIP) * ((1 - chance) * as + chance * light(truth)) + SLIP * ANY_DENSITY;
+	const values = new Float64Array(CELLS);
+	for (let cell = 0; cell < CELLS; cell += 1) values[cell] = mix(solid[cell]!, (lows[cell]! + highs[cell]!) / 2);
 	return {
 		solid: values,
 		core: (core) => {
