@@ -55,12 +55,23 @@ export function familiesOf(metal: Family['metal']): readonly Family[] {
 	return families.filter((family) => family.metal === metal);
 }
 
-function cornerDensity(corner: Corner): number {
-	return idealDensity((Object.entries(corner) as [MetalId, number][]).map(([metal, share]) => ({ share, density: metals[metal].density })));
+/** A corner as it is reckoned with: its density in g/cm³, and moles of each of its metals in a gram. */
+type Balance = { readonly density: number; readonly moles: readonly number[] };
+
+function balanceOf(corner: Corner): Balance {
+	const parts = (Object.entries(corner) as [MetalId, number][]).map(([metal, share]) => ({ share, of: metals[metal] }));
+	return {
+		density: idealDensity(parts.map(({ share, of }) => ({ share, density: of.density }))),
+		moles: parts.map(({ share, of }) => share / of.atomicMass)
+	};
 }
 
 /** Of the families in the table, worked out once; any other family is worked out when it is asked for. */
-const BALANCES = new Map(families.map((family) => [family, family.corners.map(cornerDensity)]));
+const BALANCES = new Map(families.map((family) => [family, family.corners.map(balanceOf)]));
+
+function balancesOf(family: Family): readonly Balance[] {
+	return BALANCES.get(family) ?? family.corners.map(balanceOf);
+}
 
 /**
  * Between what and what the density of a family lies at one fineness, volumes adding up.
@@ -71,19 +82,19 @@ const BALANCES = new Map(families.map((family) => [family, family.corners.map(co
  */
 export function densityRange(family: Family, perMille: number): { readonly low: number; readonly high: number } {
 	const share = perMille / 1000;
-	const balances = BALANCES.get(family) ?? family.corners.map(cornerDensity);
-	const all = balances.map((rest) => 1 / (share / metals[family.metal].density + (1 - share) / rest));
+	const all = balancesOf(family).map((rest) => 1 / (share / metals[family.metal].density + (1 - share) / rest.density));
 	return { low: Math.min(...all), high: Math.max(...all) };
 }
 
-/** How far from a pure metal an alloy of this share of the main metal is, with the balance at one corner: 0 pure, 1 halves by atoms. */
-function mixedness(metal: MetalId, share: number, corner: Corner): number {
-	const atoms = [
-		share / metals[metal].atomicMass,
-		...(Object.entries(corner) as [MetalId, number][]).map(([other, part]) => ((1 - share) * part) / metals[other].atomicMass)
-	];
-	const all = atoms.reduce((sum, n) => sum + n, 0);
-	return 2 * (1 - atoms.reduce((sum, n) => sum + (n / all) ** 2, 0));
+/** How far from a pure metal an alloy is: 0 pure, 1 halves by atoms; moles of the main metal, and of the rest by so many grams of a balance. */
+function mixedness(main: number, rest: number, { moles }: Balance): number {
+	let all = main;
+	let squares = main * main;
+	for (const each of moles) {
+		all += rest * each;
+		squares += (rest * each) ** 2;
+	}
+	return 2 * (1 - squares / (all * all));
 }
 
 /**
@@ -93,6 +104,8 @@ function mixedness(metal: MetalId, share: number, corner: Corner): number {
  * source: family figures from measured alloys (working values of ours); the fading toward the pure metal is our own choice.
  */
 export function claimOf(family: Family, perMille: number): { readonly bias: number; readonly limit: number } {
-	const fade = Math.min(1, Math.max(...family.corners.map((corner) => mixedness(family.metal, perMille / 1000, corner))));
+	const share = perMille / 1000;
+	const main = share / metals[family.metal].atomicMass;
+	const fade = Math.min(1, Math.max(...balancesOf(family).map((balance) => mixedness(main, 1 - share, balance))));
 	return fade > 0 ? { bias: family.bias * fade, limit: family.limit * fade } : { bias: 0, limit: 0 };
 }
