@@ -55,7 +55,7 @@ function warm(act: Act): number {
 	return spent / runs;
 }
 
-function median(values: readonly number[]): number {
+export function median(values: readonly number[]): number {
 	const sorted = [...values].sort((a, b) => a - b);
 	return sorted[Math.floor(sorted.length / 2)]!;
 }
