@@ -111,6 +111,22 @@ export const demoOpenLot = {
 		'1/20 14k gf chain 9.1 g',
 		'half sovereign x1',
 		'brass fitting 120 g x2',
-		'weighted 925 candlestick 188.5 g'
+		'weighted 925 candlestick 188.5 g',
+		'14k hollow chain 20.00 g'
 	]
+} as const;
+
+export const demoTesters = [
+	{ id: 'demo-reader', name: 'Pocket reader', kind: 'fluorescence', checkedDaysAgo: 21 },
+	{ id: 'demo-acids', name: 'Acids of the fair', kind: 'acids', checkedDaysAgo: 4 }
+] as const;
+
+/**
+ * What was tested of the last piece on the counter, so many minutes ago: stone and reader believe the mark, the water does not. Nobody has cut it
+ * yet: that is for whoever looks at the demo book.
+ */
+export const demoTests = {
+	touch: { minutesAgo: 12, holds: '14', attackedBy: '18' },
+	fluorescence: { minutesAgo: 10, reads: { Au: '588', Cu: '300', Ag: '104' } },
+	water: { minutesAgo: 6, air: '20', water: '17.72', temperature: '21' }
 } as const;

@@ -1,10 +1,14 @@
 import type { Change } from '$storage/append.ts';
 import type { Book } from '$storage/book.ts';
 import type { StorageProblem } from '$storage/problem.ts';
+import type { Finding } from '$trade/evidence/finding.ts';
+import type { Tester } from '$trade/evidence/tester.ts';
+import { readingU, testerDefaults } from '$trade/evidence/tester-figures.ts';
 import { parseLine } from '$trade/lot/line.ts';
 import { addPieces, emptySums } from '$trade/lot/sums.ts';
 import type { Scale } from '$trade/mass/scale.ts';
 import { weighing } from '$trade/mass/weighing.ts';
+import { fromKarat } from '$trade/metal/fineness.ts';
 import { isMetalId, metals } from '$trade/metal/metals.ts';
 import { assert, decimal } from '$trade/number/decimal.ts';
 import { ok, type Result } from '$trade/number/result.ts';
@@ -15,7 +19,10 @@ import { parseQuote, priceSheet, type PriceSheet } from '$trade/price/price-shee
 import { valueOf } from '$trade/price/value.ts';
 import { defaultSettings } from '$trade/record/kinds/settings.ts';
 import { typedNumber } from '$ui/format/typed-text.ts';
-import { demoLots, demoOpenLot, demoScale, demoSheets, demoTiers, demoUnits, type DemoLot } from './demo-scenario.ts';
+import {
+	demoLots, demoOpenLot, demoScale, demoSheets, demoTesters, demoTests, demoTiers, demoUnits, type DemoLot
+} from './demo-scenario.ts';
+import { withEvidence } from './piece-evidence.ts';
 
 type Sheet = { readonly subject: string; readonly body: PriceSheet };
 
@@ -42,6 +49,7 @@ export function demoChanges(now: number): readonly Change[] {
 	const settings = { ...defaultSettings(), currency: CURRENCY, scale: scale.id, tiers: found.value } as const;
 	return [
 		{ kind: 'scale', subject: scale.id, body: scale, replaces: null },
+		...testersOf(now).map((body): Change => ({ kind: 'tester', subject: body.id, body, replaces: null })),
 		{ kind: 'settings', subject: 'settings', body: settings, replaces: null },
 		...sheets.map(({ subject, body }): Change => ({ kind: 'prices', subject, body, replaces: null })),
 		...demoLots.flatMap((lot, index) => boughtLot(lot, index + 1, now, scale, sheets, settings.tiers)),
@@ -108,9 +116,10 @@ function openLot(now: number, scale: Scale, sheets: readonly Sheet[]): readonly 
 	const sheet = sheets[sheets.length - 1]?.subject ?? null;
 	const { name, hoursAgo, ask, lines } = demoOpenLot;
 	const openedAt = now - hoursAgo * 60 * MINUTE;
+	const pieces = piecesOf(lines, scale);
 	return [
 		{ kind: 'lot', subject, body: { name, note: '', state: 'open', purchase: null, sheet, openedAt, ask }, replaces: null },
-		...pieceChanges(subject, piecesOf(lines, scale))
+		...pieceChanges(subject, pieces.map((piece, index) => (index === pieces.length - 1 ? tested(piece, now, scale) : piece)))
 	];
 }
 
@@ -151,6 +160,39 @@ function sheetOf(quotes: Readonly<Record<string, string>>, at: number): PriceShe
 	});
 	assert(read.ok, 'the demo book has a price sheet that is none');
 	return read.value;
+}
+
+function testersOf(now: number): readonly Tester[] {
+	return demoTesters.map(({ id, name, kind, checkedDaysAgo }) => ({
+		id, name, kind, ...testerDefaults[kind], checkedOn: new Date(back(now, checkedDaysAgo, 12)).toISOString().slice(0, 10)
+	}));
+}
+
+/** A piece with the tests of the story, and the belief that follows from them. */
+function tested(piece: Piece, now: number, scale: Scale): Piece {
+	const { touch, fluorescence, water } = demoTests;
+	const at = (minutes: number) => now - minutes * MINUTE;
+	const [reader, acids] = testersOf(now);
+	assert(reader !== undefined && acids !== undefined, 'the demo book has no testers');
+	const by = ({ id, rows, bias, gross }: Tester, perMille: number) => {
+		const u = readingU(rows, 'Au', perMille);
+		return { tester: id, u, bias: Math.min(bias, u), gross };
+	};
+	const findings: readonly Finding[] = [
+		{
+			kind: 'touch', id: 'demo-touch', at: at(touch.minutesAgo), how: 'rub', ...by(acids, 585),
+			holds: fromKarat(decimal(touch.holds)), attackedBy: fromKarat(decimal(touch.attackedBy))
+		},
+		{
+			kind: 'fluorescence', id: 'demo-fluorescence', at: at(fluorescence.minutesAgo), ...by(reader, 588),
+			reads: Object.entries(fluorescence.reads).flatMap(([metal, typed]) => (isMetalId(metal) ? [{ metal, perMille: decimal(typed) }] : []))
+		},
+		{
+			kind: 'water', id: 'demo-water', at: at(water.minutesAgo), method: 'suspended', air: decimal(water.air), water: decimal(water.water),
+			division: scale.division, temperature: decimal(water.temperature)
+		}
+	];
+	return withEvidence(piece, { findings }, defaultSettings());
 }
 
 function scaleOf(now: number): Scale {

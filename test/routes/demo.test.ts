@@ -45,6 +45,18 @@ describe('the demo book', () => {
 		expect([...metals].sort()).toEqual(['Ag', 'Au', 'Cu', 'Pd', 'Pt', 'Zn']);
 		expect(changes.map(({ subject }) => subject).filter((subject) => subject !== 'settings' && !isDemoSubject(subject))).toEqual([]);
 	});
+	it('has one piece on the counter that its tests disagree about, for whoever looks to cut', () => {
+		const [only, ...others] = pieces.filter(({ body }) => body!.piece.evidence !== undefined);
+		expect(others).toEqual([]);
+		const { findings, belief, taking } = only!.body!.piece.evidence!;
+		expect(findings.map(({ kind }) => kind)).toEqual(['touch', 'fluorescence', 'water']);
+		expect(findings.every(({ at }) => at < NOW)).toBe(true);
+		expect(belief!.odds.layered).toBeGreaterThan(0.1);
+		expect(belief!.odds.layered).toBeLessThan(0.4);
+		expect(taking).toBeNull();
+		const testers = ofKind(changes, 'tester').map(({ subject }) => subject);
+		expect(findings.flatMap((finding) => ('tester' in finding ? [finding.tester] : [])).sort()).toEqual([...testers].sort());
+	});
 	it('keeps in each purchase what its pieces add up to, and pays no less than the offer and no more than the value', () => {
 		for (const { body } of purchases) {
 			const own = pieces.filter((piece) => piece.body!.lot === body!.lot);

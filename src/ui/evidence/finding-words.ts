@@ -80,7 +80,7 @@ function waterWords(finding: Extract<Finding, { kind: 'water' }>, format: Format
 		leastDivision === 0 ? '' : `a scale with steps of ${format.estimate(leastDivision, 1)}\u00a0g`
 	].filter((part) => part !== '');
 	const mute =
-		`Too light for this scale to say anything of the fineness: the step of ${format.mass(finding.division)} alone makes the density doubtful by ` +
+		`Too light for this scale to say anything of the fineness: with steps of ${format.mass(finding.division)} and a bubble the density is doubtful by ` +
 		`${format.estimate((100 * u) / density.value, 2)}\u00a0%. What would help: ${help.length === 0 ? 'another test' : help.join(', or ')}.`;
 	return { what, how, mute };
 }
