@@ -72,7 +72,8 @@ describe('evidence on the page of a piece', () => {
 		const kinds = (piece: Piece) => possibleTests(seen(piece), piece, []).map(({ kind }) => kind);
 		expect(kinds(chain)).toEqual(['magnet', 'touch', 'touch', 'fluorescence', 'water', 'core', 'assay']);
 		expect(kinds(pieceOf('14k ring 2.00 g'))).not.toContain('water');
-		const own = { id: 'good', name: 'Bench reader', kind: 'fluorescence' as const, rows: [{ metal: 'Au' as const, colour: 'any' as const, perMille: 585, u: 3 }], bias: 1, gross: 0.01, checkedOn: null };
+		const rows = [{ metal: 'Au' as const, colour: 'any' as const, perMille: 585, u: 3 }];
+		const own = { id: 'good', name: 'Bench reader', kind: 'fluorescence' as const, rows, bias: 1, gross: 0.01, checkedOn: null };
 		expect(possibleTests(seen(chain), chain, [own]).find(({ kind }) => kind === 'fluorescence')).toMatchObject({ u: 3, gross: 0.01 });
 	});
 
