@@ -28,7 +28,7 @@ const REACH = 12;
 const MARGIN = 1 / 64;
 /** Points at first, so many of them from end to end of the interval at least, and the most that are tried. */
 const POINTS = 4096;
-const POINTS_IN_INTERVAL = 256;
+const POINTS_IN_INTERVAL = 64;
 const MOST_POINTS = 2 ** 18;
 /** Less than this of a wave makes no difference to any share. */
 const NOTHING = 1e-18;
