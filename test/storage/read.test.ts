@@ -15,7 +15,8 @@ describe('reading', () => {
 		expect(await book.standing('none')).toBeNull();
 		expect(await book.lotKeys('none')).toEqual([]);
 		expect(await book.lastOrder('none')).toBe(0);
-		expect([await book.openLots(), await book.stock(), await book.purchases(9), await book.scales(), await book.testers(), await book.conflicts()]).toEqual([[], [], [], [], [], []]);
+		const lists = [book.openLots(), book.stock(), book.purchases(9), book.scales(), book.testers(), book.conflicts()];
+		expect(await Promise.all<readonly unknown[]>(lists)).toEqual(lists.map(() => []));
 		expect(await book.counts()).toEqual({ records: 0, purchasesOnlyHere: 0, conflicts: 0, photos: 0, damaged: 0, lastBackup: null, letter: 'A' });
 	});
 	it('a lot keeps its pieces in their order, with places between them', async () => {

@@ -1,7 +1,7 @@
 // npm test: everything that must hold, in order of how soon it tells something. The last line is "N passed, N failed".
 // `npm test -- unit lint` runs only the named parts; further words go to vitest as file names.
 import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { availableParallelism, tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { buildReason, builds, runBuild } from './build.js';
 import { requireChromium, requireNode, requirePackages, runTool } from './machine.js';
@@ -32,7 +32,8 @@ async function tests(project, env = {}) {
 	const files = chosen.filter((word) => !(word in parts));
 	const exit = await runTool(
 		'vitest/vitest.mjs',
-		['run', '--project', project, '--allowOnly=false', '--reporter=default', '--reporter=json', `--outputFile.json=${report}`, ...files],
+		// by itself it leaves a core idle; the browser's tests go one after the other whatever stands here
+		['run', '--project', project, `--maxWorkers=${availableParallelism()}`, '--allowOnly=false', '--reporter=default', '--reporter=json', `--outputFile.json=${report}`, ...files],
 		{ env }
 	);
 	return countTests(existsSync(report) ? readFileSync(report, 'utf8') : null, exit);
