@@ -236,7 +236,7 @@ export function combinedUncertainty(sums: LotSums, weights: Partial<Readonly<Rec
 /**
  * Between what and what the lot's fine mass of a metal lies, in grams.
  * formula: value ± normal quantile x standard uncertainty, cut at zero.
- * rounding: none (an estimate). It assumes that no piece is something else altogether: one filled piece among few is not covered.
+ * rounding: none (an estimate). It assumes that no piece is something else altogether; fineMixture counts that chance.
  * source: JCGM 100:2008 (GUM) 6.2 and G.1.
  */
 export function fineInterval(sums: LotSums, metal: MetalId, coverage: number): { low: number; high: number } {
