@@ -56,6 +56,18 @@ it('a lot of ten thousand entries stays usable: a window of rows, totals to the 
 	});
 	await page.getByRole('link', { name: /925 last fork/ }).waitFor();
 	expect(await page.locator('[data-row]').count()).toBeLessThan(100);
+
+	// what is worth testing is worked out beside the page, with progress, and can be stopped
+	const slowed = await page.context().newCDPSession(page);
+	await slowed.send('Emulation.setCPUThrottlingRate', { rate: 6 });
+	await page.getByRole('link', { name: 'What to test' }).click();
+	await page.getByRole('progressbar').waitFor();
+	await page.getByRole('button', { name: 'Cancel' }).click();
+	await page.getByText('Nothing was changed in the book.').waitFor();
+	await slowed.send('Emulation.setCPUThrottlingRate', { rate: 1 });
+	await page.getByRole('button', { name: 'Start again' }).click();
+	await page.getByText('If so many are filled').waitFor();
+	await page.getByText(/^1 of [\d,]+$/).waitFor();
 }, 240_000);
 
 it('a table with bad rows: the good ones are taken, the bad ones explained, kept and mended', async () => {

@@ -1,0 +1,82 @@
+import type { Page } from 'playwright-core';
+import { afterEach, describe, expect, it } from 'vitest';
+import { expectAccessible, expectNoSidewaysScroll, openSite, openVisitor, shot, workerReady, type Site, type Visitor } from './harness.ts';
+
+// A bag at a fair, offline: which pieces to open, what is risked with the rest. Ten thousand of them: long-lot.test.ts.
+
+const open: { sites: Site[]; visitors: Visitor[] } = { sites: [], visitors: [] };
+afterEach(async () => {
+	const closed = await Promise.allSettled([
+		...open.visitors.splice(0).map((visitor) => visitor.close()),
+		...open.sites.splice(0).map((site) => site.stop())
+	]);
+	for (const one of closed) if (one.status === 'rejected') throw one.reason;
+});
+
+const tidy = (text: string) => text.replace(/[\u00a0\u202f]/g, ' ');
+const main = async (page: Page) => tidy(await page.locator('main').innerText());
+
+async function begin(): Promise<Page> {
+	const site = await openSite('build');
+	open.sites.push(site);
+	const visitor = await openVisitor(site);
+	open.visitors.push(visitor);
+	const { page } = visitor;
+	await page.goto(site.url('/'));
+	await page.getByText('Ready for offline').waitFor();
+	await workerReady(page);
+	await site.stop();
+	await page.reload();
+	await page.getByRole('link', { name: 'Type prices' }).click();
+	await page.getByRole('textbox', { name: 'Gold', exact: true }).fill('4186.20');
+	await page.getByRole('textbox', { name: 'Silver', exact: true }).fill('52.30');
+	await page.getByRole('button', { name: 'Save prices' }).click();
+	await page.getByRole('status').filter({ hasText: 'Prices saved.' }).waitFor();
+	await page.getByRole('link', { name: 'Counter' }).click();
+	return page;
+}
+
+async function paste(page: Page, lines: readonly string[]): Promise<void> {
+	await page.getByRole('link', { name: 'Paste lines or a CSV' }).click();
+	await page.getByLabel('One piece a line, or a table').fill(lines.join('\n'));
+	await page.getByRole('button', { name: /^Add/ }).click();
+	await page.getByRole('link', { name: 'What to test' }).waitFor();
+}
+
+describe('a bag at a fair', () => {
+	it('says which pieces to open and what is risked with the rest, and learns from what was opened', async () => {
+		const page = await begin();
+		const lines = Array.from({ length: 60 }, (_, at) => (at < 10 ? `585 chain ${20 + at}.50 g` : at < 50 ? `14k ring ${2 + (at % 5)}.10 g` : '925 spoon 30.5 g'));
+		await paste(page, lines);
+		await page.getByRole('link', { name: 'What to test' }).click();
+		await page.getByText('Open these').waitFor();
+		const before = await main(page);
+		// chains of a market without control: large, and one in twenty filled; small rings of a controlled one are left
+		const [, toOpen = ''] = /Open (\d+) of 60 entries: that costs \d+ USD and saves up to [\d,]+ USD on average\./.exec(before) ?? [];
+		expect(Number(toOpen)).toBeGreaterThanOrEqual(8);
+		expect(Number(toOpen)).toBeLessThanOrEqual(12);
+		expect(before).toMatch(/The rest\s+\d+ entries, worth [\d,]+ USD on average at a price of [\d,]+ USD\./);
+		expect(before).toMatch(/the chance that at least one is filled is \d+(\.\d)? %/);
+		// one filled of sixty: opening ten misses it with five sixths
+		expect(before).toMatch(/10 of 60\s+83\.3 %/);
+		await shot(page, 'bag');
+		await page.setViewportSize({ width: 390, height: 4_000 });
+		await expectAccessible(page, 'the bag');
+		await page.setViewportSize({ width: 390, height: 844 });
+		await expectNoSidewaysScroll(page, 'the bag');
+
+		// the first of them is cut, and it is brass: the others are likelier to be filled now
+		await page.locator('.rows a').first().click();
+		const section = page.getByRole('region', { name: 'What it is' });
+		await section.getByRole('button', { name: 'Add core test' }).click();
+		await section.getByRole('textbox', { name: 'Gold as shown' }).fill('10');
+		await section.getByRole('button', { name: 'Add the reading' }).click();
+		await page.waitForFunction(() => document.querySelector('.verdict')?.textContent?.startsWith('This is a layer') === true);
+		await page.goBack();
+		await page.getByText('1 was opened, 1 filled.').waitFor();
+		const after = await main(page);
+		const [, more = ''] = /Open (\d+) of 60 entries/.exec(after) ?? [];
+		expect(Number(more)).toBeGreaterThan(Number(toOpen));
+		expect(after).toMatch(/makes a filling in each of the others \d+(\.\d)? times likelier/);
+	}, 120_000);
+});
