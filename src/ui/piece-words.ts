@@ -26,7 +26,7 @@ export function testedWords({ evidence }: Pick<Piece, 'evidence'>, format: Forma
 	const count = evidence?.findings.length ?? 0;
 	if (count === 0) return '';
 	const layered = evidence?.belief?.odds.layered ?? 0;
-	const doubt = layered > DOUBTFUL ? `, ${format.chance(layered)} filled` : '';
+	const doubt = layered > DOUBTFUL ? `, ${format.chance(layered)} to be filled` : '';
 	return `${format.count(count)} ${count === 1 ? 'test' : 'tests'}${doubt}`;
 }
 

@@ -75,7 +75,7 @@ describe('a finding as a row', () => {
 	it('counts tests beside the piece, and its doubt', () => {
 		const belief = { metal: 'Au' as const, mean: 471, low: 4, median: 580, high: 585, odds: { honest: 0.8, under: 0, other: 0, layered: 0.194 }, shared: {}, own: 200 };
 		const evidence = { build: null, findings: [touch(), water(8.75)], belief, taking: null };
-		expect(tidy(testedWords({ evidence }, format))).toBe('2 tests, 19.4 % filled');
+		expect(tidy(testedWords({ evidence }, format))).toBe('2 tests, 19.4 % to be filled');
 		expect(testedWords({ evidence: { ...evidence, findings: [touch()], belief: null } }, format)).toBe('1 test');
 		expect(testedWords({}, format)).toBe('');
 	});
