@@ -49,7 +49,8 @@ export type Prior = { readonly odds: Odds; readonly bulk: Readonly<Record<Hypoth
  * The fineness of the bulk before any test, by hypothesis, over the cells of the grid.
  * formula: honest: bell about mark − 0.4 x tolerance (mark + 0.5 where there is none) with sd 0.4 x tolerance, at least 1.2; under: least lawful
  * fineness − exponential shortfall; other: bells of sd 4 about the other standards, nearer ones likelier and lower ones three times as
- * likely, without a mark by how common each is, and 3 % anything; layered: exponential above zero of mean 15. Parts per thousand.
+ * likely, without a mark by how common each is (70 % about what is stated, where somebody states it), and 3 % anything;
+ * layered: exponential above zero of mean 15. Parts per thousand.
  * rounding: none.
  * source: 15 U.S.C. 295 and the marks' laws for the tolerances (metal/law.ts); all shapes are working defaults, common practice, no source.
  */
@@ -69,7 +70,7 @@ export function priorOf(subject: Subject, own: OwnOdds = {}): Prior {
 		bulk: {
 			honest: bellPrior(tolerance === 0 ? mark + ABOVE : mark - OF_TOLERANCE * tolerance, Math.max(LEAST_SCATTER, OF_TOLERANCE * tolerance)),
 			under: exponentialDown(legal, SHORTFALL[from]),
-			other: otherStandards(metal, claimed),
+			other: from === 'unmarked' && claimed !== null ? stated(otherStandards(metal, null), claimed) : otherStandards(metal, claimed),
 			layered: UNDER_ANY_LAYER
 		}
 	};
@@ -127,4 +128,13 @@ function otherStandards(metal: MainMetal, claimed: number | null): Vector {
 	const scale = (1 - ANYTHING) / total;
 	for (let cell = 0; cell < CELLS; cell += 1) values[cell] = values[cell]! * scale + ANYTHING / CELLS;
 	return values;
+}
+
+/** A piece without a stamp whose composition somebody states, as of dental alloys: mostly about that, else any standard. Working defaults. */
+const STATED = 0.7;
+const STATED_SCATTER = 12;
+
+function stated(standards: Vector, claimed: number): Vector {
+	const bell = bellPrior(claimed, STATED_SCATTER);
+	return standards.map((chance, cell) => STATED * bell[cell]! + (1 - STATED) * chance);
 }

@@ -17,7 +17,8 @@ export function verdict(subject: Subject, found: Assessment, tested: boolean, fo
 		return tested ? `Without a mark it is what the tests say: ${between}, nine times in ten.` : 'It has no mark and no test: it may be anything.';
 	}
 	const mark = karatWords(subject.claimed, subject.metal, format);
-	if (!tested) return `By its mark alone, untested: ${mark}, ${between}, nine times in ten.`;
+	const alone = subject.origin === 'unmarked' ? 'By what is said of it alone' : 'By its mark alone';
+	if (!tested) return `${alone}, untested: ${mark}, ${between}, nine times in ten.`;
 	if (odds.other > 0.5) return `It is not ${mark}, it is another standard: ${between}, nine times in ten.`;
 	if (odds.under > 0.5) return `It runs under its mark: ${between}, nine times in ten.`;
 	if (odds.honest > 0.9) return `It is what its mark says, ${mark}: ${between}, nine times in ten.`;

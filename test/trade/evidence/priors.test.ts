@@ -31,6 +31,13 @@ describe('what a piece is before any test', () => {
 		expect(free.odds).toEqual({ honest: 0, under: 0, other: 0.9, layered: 0.1 });
 		expect(free.bulk.other[585]!).toBeGreaterThan(free.bulk.other[750]!);
 	});
+	it('believes a stated composition without a stamp for the most part, as of dental alloys', () => {
+		const { odds, bulk } = priorOf({ ...unmarked, claimed: 625, legal: 625 });
+		expect(odds.other).toBeCloseTo(0.9, 12);
+		expect(quantileOf(bulk.other, 0.5)).toBeGreaterThan(600);
+		expect(quantileOf(bulk.other, 0.5)).toBeLessThan(640);
+		expect(sum(bulk.other)).toBeCloseTo(1, 9);
+	});
 	it('takes the buyer\'s own odds, scaled to one', () => {
 		const own = priorOf(bar999, { 'stranger-bar': { honest: 3, under: 0, other: 0, layered: 1 } });
 		expect(own.odds).toEqual({ honest: 0.75, under: 0, other: 0, layered: 0.25 });
