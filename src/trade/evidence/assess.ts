@@ -151,7 +151,9 @@ export function assessObservations(start: Start, observations: readonly Observat
 		cores: cores.map(({ core, chance }, index) => {
 			const odds = found.cores[index]!;
 			const prior0 = prior.odds.layered * chance;
-			return { core, odds, against: odds / prior0 / Math.max(Number.MIN_VALUE, found.odds[reference] / before) };
+			// what nobody thinks possible is told apart from nothing
+			const told = prior0 > 0 && before > 0;
+			return { core, odds, against: told ? odds / prior0 / Math.max(Number.MIN_VALUE, found.odds[reference] / before) : 1 };
 		})
 	};
 }

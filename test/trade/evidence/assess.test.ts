@@ -197,6 +197,17 @@ describe('what is believed of a piece', () => {
 		expect(prudent[1]! > 575 && prudent[1]! < found.median).toBe(true);
 	});
 
+	it('bears odds of the buyer that rule something out', () => {
+		const none = { honest: 1, under: 0, other: 0, layered: 0 };
+		const certain = assess(startOf(stamped14, { 'us-modern': none }), [core(12), water(8.6)]);
+		expect(certain.odds).toEqual(none);
+		expect(certain.cores.every(({ odds, against }) => odds === 0 && against === 1)).toBe(true);
+		const filled = assess(startOf(stamped14, { 'us-modern': { honest: 0, under: 0, other: 0, layered: 1 } }), [reading(588), core(580)]);
+		expect(filled.odds.layered).toBe(1);
+		expect(filled.mean).toBeLessThan(400);
+		expect(Number.isFinite(filled.logEvidence)).toBe(true);
+	});
+
 	it('says what a finding says nothing of', () => {
 		const { logEvidence, odds } = of(stamped14, water(8.75, 2));
 		expect(logEvidence).toBe(of(stamped14).logEvidence);
