@@ -1,6 +1,6 @@
 import { BOOK, DEMO_BOOK, openBook, removeBook } from '$storage/book.ts';
 import type { MarkerReading } from '$storage/marker.ts';
-import type { StorageProblem } from '$storage/problem.ts';
+import { StorageFailure, type StorageProblem } from '$storage/problem.ts';
 import { formatFor } from '$ui/format.ts';
 import { sayProblem } from './say-problem.ts';
 import { Shop } from './shop.svelte.ts';
@@ -41,12 +41,20 @@ export class Opening {
 			}
 		}
 		const stopEvents = book.onEvent((event) => {
-			if (event.kind === 'superseded' || event.kind === 'removed') {
-				void sayProblem({ kind: 'storage-superseded' }, formatFor(navigator.language)).then((said) => (this.readOnly = said));
-			}
+			if (event.kind === 'superseded' || event.kind === 'removed') void this.#superseded();
 		});
+		// pages read without asking what may go wrong: a read that could not be done is told of here, for all of them
+		const onFailure = (event: PromiseRejectionEvent): void => {
+			const thrown: unknown = event.reason;
+			if (!(thrown instanceof StorageFailure)) return;
+			event.preventDefault();
+			if (thrown.problem.kind === 'storage-superseded') void this.#superseded();
+			else void sayProblem(thrown.problem, shop.format).then((said) => shop.say(`Not read. ${said}`));
+		};
+		addEventListener('unhandledrejection', onFailure);
 		const stopShop = await shop.start();
 		this.#stop = () => {
+			removeEventListener('unhandledrejection', onFailure);
 			stopEvents();
 			stopShop();
 			book.close();
@@ -57,6 +65,11 @@ export class Opening {
 			return;
 		}
 		this.shop = shop;
+	}
+
+	/** Another tab has moved the book to a newer app, or it was removed: this page must be loaded again. */
+	async #superseded(): Promise<void> {
+		this.readOnly = await sayProblem({ kind: 'storage-superseded' }, formatFor(navigator.language));
 	}
 
 	/** The person has read that an earlier book is gone and goes on with this one. */

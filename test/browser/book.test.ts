@@ -273,6 +273,10 @@ describe('a backup', () => {
 					request.onerror = () => reject(request.error);
 				})
 		);
+		// the book was taken away under the open page: what it goes on to read fails, and only the banner says so
+		await page.getByRole('link', { name: 'Stock' }).tap();
+		await page.getByText('Another tab has opened this book with a newer version').waitFor();
+		await page.getByRole('link', { name: 'Counter' }).tap();
 		await page.goto(host.url('/book'));
 		await page.getByText('This book was written by a newer version').waitFor();
 		const before = await dump(page);
