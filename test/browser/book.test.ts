@@ -20,10 +20,16 @@ async function site(): Promise<Site> {
 	return opened;
 }
 
+/** A first visit, up to the word that it works offline: it comes when it comes, and moves what a finger is about to tap. */
 async function visit(at: Site): Promise<Page> {
 	const opened = await openVisitor(at);
 	visitors.push(opened);
-	return opened.page;
+	const { page } = opened;
+	await page.goto(at.url('/'));
+	const ready = page.locator('.banner').filter({ hasText: 'Ready for offline' }).getByRole('button', { name: 'Good' });
+	await ready.tap();
+	await ready.waitFor({ state: 'detached' });
+	return page;
 }
 
 const button = (page: Page, name: string) => page.getByRole('button', { name, exact: true });
