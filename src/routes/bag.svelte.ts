@@ -1,12 +1,13 @@
 import { onDestroy } from 'svelte';
 import type { BagPiece } from '$trade/lot/bag.ts';
-import { subjectOf } from '$trade/piece/subject.ts';
+import { shareFor } from '$trade/price/offer.ts';
 import type { PriceSheet } from '$trade/price/price-sheet.ts';
+import { valueOf } from '$trade/price/value.ts';
 import type { Bodies } from '$trade/record/kind.ts';
 import type { SettingsBody } from '$trade/record/kinds/settings.ts';
 import type { Book } from '$storage/book.ts';
-import { writeEvidence, type Answer, type Job, type Sent } from './bag-weighed.ts';
-import { stakeOf } from './piece-evidence.ts';
+import { sentOf } from './bag-sent.ts';
+import type { Answer, Job, Sent } from './bag-weighed.ts';
 
 /** So many pieces are read at a time. */
 const READ_AT_ONCE = 500;
@@ -15,11 +16,11 @@ const READ_AT_ONCE = 500;
 export class Bag {
 	total = $state(0);
 	done = $state(0);
-	/** What is being done; 'idle' before it began and after it was stopped. */
-	stage = $state<'idle' | 'reading' | 'weighing' | 'ready' | 'failed'>('idle');
+	/** What is being done: it begins with reading. */
+	stage = $state<'reading' | 'weighing' | 'ready' | 'stopped' | 'failed'>('reading');
 	pieces = $state.raw<readonly BagPiece[]>([]);
 	before = $state(0);
-	/** Pieces that no test speaks of: base metal, layers by their mark, no price. */
+	/** Entries that no test speaks of: base metal, layers by their mark, no price. */
 	apart = $state(0);
 	names = $state.raw<ReadonlyMap<string, Bodies['piece']['piece']>>(new Map());
 	#worker: Worker | null = null;
@@ -37,29 +38,31 @@ export class Bag {
 		this.#turn += 1;
 		this.#worker?.terminate();
 		this.#worker = null;
-		if (this.running) this.stage = 'idle';
+		if (this.running) this.stage = 'stopped';
 	}
 
 	async weigh(book: Book, lot: string, sheet: PriceSheet, settings: SettingsBody): Promise<void> {
 		this.stop();
 		const turn = this.#turn;
 		this.stage = 'reading';
-		const keys = await book.lotKeys(lot);
+		[this.total, this.done] = [0, 0];
+		const [keys, found] = await Promise.all([book.lotKeys(lot), book.lot(lot)]);
 		if (turn !== this.#turn) return;
-		[this.total, this.done] = [keys.length, 0];
+		this.total = keys.length;
+		// the share that is paid for the whole lot is what each piece of it costs
+		const share = shareFor(valueOf(found?.sums.fine ?? {}, sheet).total, settings.tiers);
 		const names = new Map<string, Bodies['piece']['piece']>();
 		const sent: Sent[] = [];
 		for (let from = 0; from < keys.length; from += READ_AT_ONCE) {
-			const found = await book.pieces(keys.slice(from, from + READ_AT_ONCE));
+			const entries = await book.pieces(keys.slice(from, from + READ_AT_ONCE));
 			if (turn !== this.#turn) return;
-			for (const entry of found) {
+			for (const entry of entries) {
 				const piece = entry?.body?.piece;
 				if (entry === null || piece === undefined) continue;
-				const subject = subjectOf(piece);
-				const stake = typeof subject === 'string' ? null : stakeOf(piece, subject.metal, sheet, settings);
-				if (typeof subject === 'string' || stake === null) continue;
+				const ready = sentOf(entry.subject, piece, sheet, settings, share);
+				if (ready === null) continue;
 				names.set(entry.subject, piece);
-				sent.push({ key: entry.subject, subject, evidence: writeEvidence(piece.evidence), stake });
+				sent.push(ready);
 			}
 			this.done = Math.min(keys.length, from + READ_AT_ONCE);
 		}

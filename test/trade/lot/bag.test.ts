@@ -1,14 +1,15 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { bagPlan, BAG_WEIGHT, toldByOpened, type BagPiece } from '../../../src/trade/lot/bag.ts';
+import { anyIfAlike, bagPlan, BAG_WEIGHT, toldByOpened, type BagPiece } from '../../../src/trade/lot/bag.ts';
 
 /** Worth 600 if it is sound and nothing if it is layered; 500 are asked for it. */
 const piece = (key: string, odds: number, scale = 1, opened = false): BagPiece => ({
 	key,
+	count: 1,
 	odds,
 	opened,
 	stake: { whole: 1_000 * scale, price: 500 * scale },
-	cases: { layered: { lost: 500 * scale, won: 0 }, sound: { lost: 0, won: 100 * scale } }
+	cases: { layered: { lost: 500 * scale, won: 0, atLoss: 1 }, sound: { lost: 0, won: 100 * scale, atLoss: 0 } }
 });
 
 describe('a bag at a fair', () => {
@@ -24,7 +25,38 @@ describe('a bag at a fair', () => {
 		expect(plan.rest.price).toBe(550);
 		expect(plan.rest.lost).toBeCloseTo(0.01 * 500 + 0.1 * 50, 9);
 		expect(plan.rest.worth).toBeCloseTo(550 + 0.99 * 100 - 5 + 0.9 * 10 - 5, 9);
-		expect(plan.rest.anyLayered).toBeCloseTo(1 - 0.99 * 0.9, 12);
+		expect(plan.rest.atLoss).toBeCloseTo(0.01 + 0.1, 12);
+		expect(plan.rest.anyLayered.alone).toBeCloseTo(1 - 0.99 * 0.9, 12);
+		// four pieces' worth of knowledge at 5.5 %: 3.78 of 4 sound, then 4.78 of 5
+		expect(plan.rest.anyLayered.alike).toBeCloseTo(1 - (3.78 / 4) * (4.78 / 5), 12);
+	});
+
+	it('takes pieces that were weighed together as so many pieces', () => {
+		const entries = [piece('chain', 0.1), piece('ring', 0.01), piece('ring too', 0.01), piece('chain too', 0.1)];
+		const apart = bagPlan(entries, 0.05, 12);
+		const together = bagPlan([{ ...piece('chain', 0.1), count: 2 }, { ...piece('ring', 0.01), count: 2 }], 0.05, 12);
+		expect(together.test).toEqual([{ key: 'chain', count: 2, odds: 0.1, gain: expect.closeTo(50, 9) }]);
+		expect([together.tests, together.cost, together.pieces]).toEqual([2, 24, 4]);
+		expect([apart.tests, apart.cost, apart.pieces]).toEqual([2, 24, 4]);
+		expect(together.gain).toBeCloseTo(apart.gain, 9);
+		for (const name of ['pieces', 'worth', 'price', 'lost', 'atLoss'] as const) expect(together.rest[name]).toBeCloseTo(apart.rest[name], 9);
+		for (const name of ['alone', 'alike'] as const) expect(together.rest.anyLayered[name]).toBeCloseTo(apart.rest.anyLayered[name], 12);
+	});
+
+	it('finds a layer in any of them less likely when they are alike than when each stands alone', () => {
+		// weight 4 at 5 %: nothing in fifty has a chance of B(0.2, 53.8) over B(0.2, 3.8)
+		expect(anyIfAlike(1, 0.05, 4)).toBeCloseTo(0.05, 12);
+		expect(anyIfAlike(2, 0.05, 4)).toBeCloseTo(1 - 0.95 * (4.8 / 5), 12);
+		expect([anyIfAlike(0, 0.05, 4), anyIfAlike(50, 0, 4), anyIfAlike(3, 1, 4)]).toEqual([0, 0, 1]);
+		fc.assert(
+			fc.property(fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { maxLength: 60 }), fc.integer({ min: 0, max: 5 }), (list, opened) => {
+				const bag = [...list.map((odds, at) => piece(`p${at}`, odds)), ...Array.from({ length: opened }, (_, at) => piece(`o${at}`, 0, 1, true))];
+				const { alone, alike } = bagPlan(bag, 0.05, 1e9).rest.anyLayered;
+				expect(alike).toBeLessThanOrEqual(alone + 1e-12);
+				expect(alike).toBeGreaterThanOrEqual(-1e-12);
+			}),
+			{ numRuns: 1_000 }
+		);
 	});
 
 	it('learns of the others from those that were opened', () => {
@@ -55,13 +87,14 @@ describe('a bag at a fair', () => {
 	});
 
 	it('is nothing without pieces, and leaves nothing out', () => {
-		expect(bagPlan([], 0, 12)).toMatchObject({ test: [], cost: 0, gain: 0, rest: { pieces: 0, anyLayered: 0 } });
+		expect(bagPlan([], 0, 12)).toMatchObject({ test: [], cost: 0, gain: 0, pieces: 0, tests: 0, rest: { pieces: 0, anyLayered: { alone: 0, alike: 0 } } });
 		fc.assert(
-			fc.property(fc.array(fc.tuple(fc.double({ min: 0, max: 1, noNaN: true }), fc.boolean()), { maxLength: 40 }), (list) => {
-				const bag = list.map(([odds, opened], at) => piece(`p${at}`, odds, 1, opened));
-				const { test, rest, opened } = bagPlan(bag, 0.05, 12);
-				expect(test.length + rest.pieces + opened.pieces).toBe(bag.length);
-				expect(rest.anyLayered >= 0 && rest.anyLayered <= 1).toBe(true);
+			fc.property(fc.array(fc.tuple(fc.double({ min: 0, max: 1, noNaN: true }), fc.boolean(), fc.integer({ min: 1, max: 9 })), { maxLength: 40 }), (list) => {
+				const bag = list.map(([odds, opened, count], at) => ({ ...piece(`p${at}`, odds, 1, opened), count }));
+				const { pieces, tests, rest, opened } = bagPlan(bag, 0.05, 12);
+				const shut = bag.filter((each) => !each.opened).reduce((sum, { count }) => sum + count, 0);
+				expect([tests + rest.pieces, pieces, opened.pieces]).toEqual([shut, shut, bag.filter((each) => each.opened).length]);
+				for (const any of Object.values(rest.anyLayered)) expect(any >= -1e-12 && any <= 1).toBe(true);
 			}),
 			{ numRuns: 1_000 }
 		);
