@@ -52,6 +52,7 @@ describe('every page, in light and dark, on a narrow screen', () => {
 			['/lot/new/paste', 'Paste lines or a CSV'],
 			['/lot/nowhere/pay', 'Pay'],
 			['/lot/nowhere/seller', 'For your pieces we pay'],
+			['/lot/nowhere/bag', 'The bag: what to test'],
 			['/lot/nowhere/piece/none', 'Piece'],
 			['/purchase/none', 'No such purchase'],
 			['/no/such/page', 'No such page']
@@ -67,7 +68,7 @@ describe('every page, in light and dark, on a narrow screen', () => {
 		await expectFit(page, 'the counter');
 		const lot = (await page.getByRole('link', { name: 'Turn to the seller' }).getAttribute('href'))!.split('/').at(-2)!;
 		const piece = (await page.locator('[data-row] a').first().getAttribute('href'))!.split('/').at(-1)!;
-		for (const path of ['/stock', '/book', `/lot/${lot}/seller`, `/lot/${lot}/pay`, `/lot/${lot}/piece/${piece}`]) {
+		for (const path of ['/stock', '/book', `/lot/${lot}/seller`, `/lot/${lot}/pay`, `/lot/${lot}/bag`, `/lot/${lot}/piece/${piece}`]) {
 			await page.goto(site.url(path));
 			await page.getByRole('heading', { level: 1 }).waitFor();
 			await page.waitForTimeout(400);

@@ -52,13 +52,22 @@ describe('a bag at a fair', () => {
 		await page.getByText('Open these').waitFor();
 		const before = await main(page);
 		// chains of a market without control: large, and one in twenty filled; small rings of a controlled one are left
-		const [, toOpen = ''] = /Open (\d+) of 60 entries: that costs \d+ USD and saves up to [\d,]+ USD on average\./.exec(before) ?? [];
+		const [, toOpen = ''] = /Open (\d+) of 60 pieces: that costs \d+ USD and saves up to [\d,]+ USD on average\./.exec(before) ?? [];
 		expect(Number(toOpen)).toBeGreaterThanOrEqual(8);
 		expect(Number(toOpen)).toBeLessThanOrEqual(12);
-		expect(before).toMatch(/The rest\s+\d+ entries, worth [\d,]+ USD on average at a price of [\d,]+ USD\./);
-		expect(before).toMatch(/the chance that at least one is filled is \d+(\.\d)? %/);
+		expect(before).toMatch(/The rest\s+\d+ pieces, worth [\d,]+ USD on average at a price of [\d,]+ USD\./);
+		const chances = /at least one of them is filled is (\d+(?:\.\d)?) % if one seller’s pieces are alike, and (\d+(?:\.\d)?) % if each stands alone\./.exec(before);
+		expect(Number(chances?.[1])).toBeLessThan(Number(chances?.[2]));
 		// one filled of sixty: opening ten misses it with five sixths
 		expect(before).toMatch(/10 of 60\s+83\.3 %/);
+		// one of sixty is found with 57 of them; three of sixty are missed by ten tests with 50 x 49 x 48 / (60 x 59 x 58)
+		expect(before).toContain('Open 57 at random, and it is missed once in twenty times at most.');
+		const more = page.getByRole('button', { name: 'Suppose filled: one more' });
+		await more.click();
+		await more.click();
+		await page.getByText('57.3 %').waitFor();
+		expect(await main(page)).toMatch(/10 of 60\s+57\.3 %/);
+		await page.getByRole('button', { name: 'Suppose filled: one less' }).click();
 		await shot(page, 'bag');
 		await page.setViewportSize({ width: 390, height: 4_000 });
 		await expectAccessible(page, 'the bag');
@@ -75,8 +84,25 @@ describe('a bag at a fair', () => {
 		await page.goBack();
 		await page.getByText('1 was opened, 1 filled.').waitFor();
 		const after = await main(page);
-		const [, more = ''] = /Open (\d+) of 60 entries/.exec(after) ?? [];
-		expect(Number(more)).toBeGreaterThan(Number(toOpen));
+		const [, others = ''] = /Open (\d+) of 59 pieces/.exec(after) ?? [];
+		expect(Number(others)).toBeGreaterThan(Number(toOpen));
 		expect(after).toMatch(/makes a filling in each of the others \d+(\.\d)? times likelier/);
 	}, 120_000);
+
+	it('tells pieces that were weighed together apart, and has a word for a bag of brass', async () => {
+		const page = await begin();
+		await paste(page, ['585 chain 90.60 g x3', '14k ring 2.10 g']);
+		await page.getByRole('link', { name: 'What to test' }).click();
+		await page.getByText('Open these').waitFor();
+		expect(await main(page)).toContain('Open 3 of 4 pieces: that costs 36 USD');
+		expect(await main(page)).toMatch(/585 chain × 3\s+[\d.]+ USD each/);
+		expect(await main(page)).toMatch(/The rest\s+1 piece, worth/);
+
+		await page.getByRole('link', { name: 'Counter' }).click();
+		await page.getByRole('button', { name: 'New lot' }).click();
+		await paste(page, ['brass tap 120 g']);
+		await page.getByRole('link', { name: 'What to test' }).click();
+		await page.getByText('Nothing to test').waitFor();
+		await expectAccessible(page, 'a bag of brass');
+	}, 60_000);
 });
