@@ -5,7 +5,8 @@ import { readPurchaseNumber } from '$trade/record/kinds/purchase.ts';
 import { readRecord, type StoredRecord } from '$trade/record/record.ts';
 import { whatIsWrong } from './backup.ts';
 import { stopIfCancelled, type Running } from './backup-format.ts';
-import { loadSums, storeSums, sumsFromScratch } from './lot-sums.ts';
+import { decodeSums, encodeSums } from '$trade/lot/sums-stored.ts';
+import { sumsFromScratch } from './lot-sums.ts';
 import type { Session } from './open.ts';
 import { isWhole } from './photos.ts';
 import { problemOf, type StorageProblem } from './problem.ts';
@@ -148,10 +149,9 @@ function rowText(row: CurrentRow | undefined): string {
 
 /** Sums as one text; a lot without pieces is the same as no sums. Scales that once were in it do not count. */
 function sumsText(row: SumsRow | undefined): string {
-	const sums = row === undefined ? emptySums() : loadSums(row.sums);
+	const sums = row === undefined ? emptySums() : decodeSums(row.sums);
 	if (sums === null) return 'unreadable';
-	const plain = JSON.stringify(storeSums(sums), (_, value: unknown) => (typeof value === 'bigint' ? `${value}n` : value));
-	return canonicalJson([JSON.parse(plain) as Json, [...(row?.damaged ?? [])]]);
+	return canonicalJson([encodeSums(sums) as Json, [...(row?.damaged ?? [])]]);
 }
 
 async function photoFindings(session: Session, signal: AbortSignal | undefined): Promise<Finding[]> {

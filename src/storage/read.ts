@@ -2,7 +2,8 @@ import { emptySums, type LotSums } from '$trade/lot/sums.ts';
 import type { Bodies, RecordKind } from '$trade/record/kind.ts';
 import type { StoredRecord } from '$trade/record/record.ts';
 import { byTime } from '$trade/record/union.ts';
-import { loadSums, sumsFromScratch } from './lot-sums.ts';
+import { decodeSums } from '$trade/lot/sums-stored.ts';
+import { sumsFromScratch } from './lot-sums.ts';
 import type { Session } from './open.ts';
 import { entryOf, pieceShelf, type Entry } from './rows.ts';
 import type { BookDatabase, CurrentRow } from './schema.ts';
@@ -83,7 +84,7 @@ async function withSums(session: Session, lots: readonly Entry<'lot'>[]): Promis
 	const found: LotFound[] = [];
 	for (const [index, each] of lots.entries()) {
 		const row = rows[index];
-		const sums = row === undefined ? emptySums() : loadSums(row.sums);
+		const sums = row === undefined ? emptySums() : decodeSums(row.sums);
 		if (sums !== null) {
 			found.push({ lot: each, sums, damaged: row?.damaged ?? [] });
 			continue;
@@ -95,7 +96,7 @@ async function withSums(session: Session, lots: readonly Entry<'lot'>[]): Promis
 			await session.use((db) => pieceRows(db, each.subject)),
 			await weighedBy(session, new Map())
 		);
-		found.push({ lot: each, sums: loadSums(again.sums)!, damaged: again.damaged });
+		found.push({ lot: each, sums: decodeSums(again.sums)!, damaged: again.damaged });
 	}
 	return found;
 }

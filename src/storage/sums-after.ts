@@ -1,7 +1,8 @@
 import type { Scale } from '$trade/mass/scale.ts';
 import { canonicalJson } from '$trade/record/json.ts';
 import type { Session } from './open.ts';
-import { storeSums, sumsFromScratch, sumsWith, type Weighed } from './lot-sums.ts';
+import { encodeSums } from '$trade/lot/sums-stored.ts';
+import { sumsFromScratch, sumsWith, type Weighed } from './lot-sums.ts';
 import { emptySums, type Spreads } from '$trade/lot/sums.ts';
 import { entryOf, pieceShelf } from './rows.ts';
 import type { BookDatabase, CurrentRow, SumsRow } from './schema.ts';
@@ -50,7 +51,7 @@ export async function sumsAfter(
 			scratch || again.has(lot)
 				? null
 				: sumsWith(
-						known[index] ?? { lot, sums: storeSums(emptySums()), scales: [], damaged: [] },
+						known[index] ?? { lot, sums: encodeSums(emptySums()), scales: [], damaged: [] },
 						gone.get(lot) ?? [],
 						come.get(lot) ?? [],
 						weighed

@@ -6,7 +6,7 @@ import { decimal } from '../../src/trade/number/decimal.ts';
 import { canonicalText } from '../../src/trade/record/record.ts';
 import { defaultSettings } from '../../src/trade/record/kinds/settings.ts';
 import { newId } from '../../src/storage/ids.ts';
-import { storeSums } from '../../src/storage/lot-sums.ts';
+import { encodeSums } from '../../src/trade/lot/sums-stored.ts';
 import { makePhoto } from '../../src/storage/photos.ts';
 import { pieceOf } from '../trade/piece/some-pieces.ts';
 import { contentOf, device, lotChange, opened, pieceChange, problem, purchaseChange, raw, saved, START, value } from './some-books.ts';
@@ -255,8 +255,8 @@ describe('running sums', () => {
 		const from = (entries: [string, string][]) => addPieces(emptySums(), entries.map(([key, line]) => ({ key, piece: pieceOf(line) })));
 		const one = (await book.lot('lot-1'))!.sums;
 		const two = (await book.lot('lot-2'))!.sums;
-		expect(sumsText(storeSums(one))).toBe(sumsText(storeSums(from([['p-1', '18k ring 3.25g']]))));
-		expect(sumsText(storeSums(two))).toBe(sumsText(storeSums(from([['p-2', '925 fork 52.7g x3']]))));
+		expect(sumsText(encodeSums(one))).toBe(sumsText(encodeSums(from([['p-1', '18k ring 3.25g']]))));
+		expect(sumsText(encodeSums(two))).toBe(sumsText(encodeSums(from([['p-2', '925 fork 52.7g x3']]))));
 		expect(await book.check()).toEqual([]);
 	});
 	it('follow the scale and the spreads that are in them', async () => {
@@ -277,7 +277,7 @@ describe('running sums', () => {
 		await saved(book, [{ kind: 'settings', subject: 'settings', body: { ...defaultSettings(), spreads }, replaces: null }]);
 		expect(await book.check()).toEqual([]);
 		await saved(book, [{ kind: 'piece', subject: 'p-1', body: null, replaces: (await book.standing('p-1'))! }]);
-		expect(sumsText(storeSums((await book.lot('lot-1'))!.sums))).toBe(sumsText(storeSums(emptySums())));
+		expect(sumsText(encodeSums((await book.lot('lot-1'))!.sums))).toBe(sumsText(encodeSums(emptySums())));
 	});
 });
 

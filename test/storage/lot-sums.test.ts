@@ -4,7 +4,8 @@ import { addPieces, emptySums } from '../../src/trade/lot/sums.ts';
 import { decimal } from '../../src/trade/number/decimal.ts';
 import { encodeBody } from '../../src/trade/record/kind.ts';
 import type { Piece } from '../../src/trade/piece/piece.ts';
-import { loadSums, storeSums, sumsFromScratch, sumsWith } from '../../src/storage/lot-sums.ts';
+import { decodeSums, encodeSums } from '../../src/trade/lot/sums-stored.ts';
+import { sumsFromScratch, sumsWith } from '../../src/storage/lot-sums.ts';
 import type { CurrentRow } from '../../src/storage/schema.ts';
 import { anyPiece } from '../trade/piece/some-pieces.ts';
 
@@ -36,8 +37,8 @@ describe('kept sums', () => {
 		fc.assert(
 			fc.property(fc.array(anyPiece, { maxLength: 6 }), (pieces) => {
 				const sums = addPieces(emptySums(), pieces.map((piece, n) => ({ piece, key: `p-${n}` })));
-				const stored = structuredClone(storeSums(sums));
-				expect(text(storeSums(loadSums(stored)!))).toBe(text(stored));
+				const stored = structuredClone(encodeSums(sums));
+				expect(text(encodeSums(decodeSums(stored)!))).toBe(text(stored));
 			}),
 			{ numRuns: 1_000 }
 		);
@@ -69,7 +70,7 @@ describe('kept sums', () => {
 		);
 	});
 	it.each([null, {}, { gross: 'x' }, { gross: '1', net: '1', fine: { Au: 'x' }, byClass: {} }, 7])('are nothing when %j stands there', (stored) => {
-		expect(loadSums(stored)).toBeNull();
+		expect(decodeSums(stored)).toBeNull();
 		expect(sumsWith({ lot: 'lot-1', sums: stored, scales: [], damaged: [] }, [], [], none)).toBeNull();
 	});
 	it('cannot be carried on without a piece that was added whole and is damaged now', () => {

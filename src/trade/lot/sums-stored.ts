@@ -52,7 +52,8 @@ export function decodeSums(stored: unknown): LotSums | null {
 	const fine = readFine(stored.fine);
 	const byClass = readAll(stored.byClass, readClass);
 	const shared = readAll(stored.shared, (by) => readAll(by, whole, (name) => isQuantity(name)));
-	const expected = readAll(stored.expected, whole, isMetalId);
+	// an older release knew no findings
+	const expected = readAll(stored.expected ?? {}, whole, isMetalId);
 	const own = readAll(stored.own, whole, (name) => name.split(' ').length === 2 && name.split(' ').every(isQuantity));
 	if (entries === null || pieces === null || gross === null || net === null) return null;
 	if (fine === null || byClass === null || shared === null || expected === null || own === null) return null;
@@ -68,9 +69,10 @@ function isQuantity(name: string): name is Quantity {
 }
 
 const count = (value: unknown) => (typeof value === 'number' && Number.isSafeInteger(value) && value >= 0 ? value : null);
-const whole = (value: unknown) => (typeof value === 'string' && /^-?\d{1,80}$/.test(value) ? BigInt(value) : null);
+/** An older release wrote whole numbers as they are. */
+const whole = (value: unknown) => (typeof value === 'bigint' || (typeof value === 'string' && /^-?\d{1,80}$/.test(value)) ? BigInt(value) : null);
 const grams = (value: unknown): Decimal | null =>
-	typeof value === 'string' && /^\d{1,40}(?:\.\d{1,40})?$/.test(value) ? decimal(value) : null;
+	typeof value === 'string' && /^\d{1,80}(?:\.\d{1,80})?$/.test(value) ? decimal(value) : null;
 const fraction = (value: unknown): Exact | null => (typeof value === 'string' ? exactFromText(value) : null);
 
 /** Null as soon as one value or one name is not what it should be. */

@@ -19,6 +19,10 @@ describe('the sums of a lot in a store', () => {
 			{ numRuns: 1_000 }
 		);
 		const stored = encodeSums(addPiece(emptySums(), pieceOf('14k chain 12.4g'), 'a'));
+		// an older release wrote whole numbers as they are, and knew no findings
+		const { shared, own } = addPiece(emptySums(), pieceOf('14k chain 12.4g'), 'a');
+		const { expected: _, ...older } = { ...stored, shared, own };
+		expect(encodeSums(decodeSums(structuredClone(older))!)).toEqual(stored);
 		for (const damage of [
 			{ gross: '12,4' }, { net: null }, { entries: 1.5 }, { entries: -1 }, { fine: { Xx: '1' } }, { fine: { Au: '1/0' } }, { fine: [] },
 			{ byClass: { a: {} } }, { shared: { a: { Au: '1.5' } } }, { shared: { a: { Xx: '1' } } }, { own: { 'Au Xx': '1' } }, { own: { 'Au Au': 5 } }
