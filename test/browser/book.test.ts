@@ -20,14 +20,14 @@ async function site(): Promise<Site> {
 	return opened;
 }
 
-/** A first visit, up to the word that it works offline: it comes when it comes, and moves what a finger is about to tap. */
+/** A first visit, up to the word that it works offline. */
 async function visit(at: Site): Promise<Page> {
 	const opened = await openVisitor(at);
 	visitors.push(opened);
 	const { page } = opened;
 	await page.goto(at.url('/'));
 	const ready = page.locator('.banner').filter({ hasText: 'Ready for offline' }).getByRole('button', { name: 'Good' });
-	await ready.tap();
+	await ready.click();
 	await ready.waitFor({ state: 'detached' });
 	return page;
 }
@@ -46,16 +46,16 @@ async function expectClean(page: Page, name: string): Promise<void> {
 
 async function openDemo(page: Page, host: Site): Promise<void> {
 	await page.goto(host.url('/book'));
-	await button(page, 'Look at a demo book').tap();
+	await button(page, 'Look at a demo book').click();
 	await page.getByText('A-0011').waitFor();
 }
 
 /** Makes a backup and gives back where the file lies. */
 async function backUp(page: Page, host: Site, name: string): Promise<string> {
 	await page.goto(host.url('/book/backup'));
-	await button(page, 'Make a backup').tap();
+	await button(page, 'Make a backup').click();
 	await button(page, 'Save or share the file').waitFor();
-	const [download] = await Promise.all([page.waitForEvent('download'), button(page, 'Save or share the file').tap()]);
+	const [download] = await Promise.all([page.waitForEvent('download'), button(page, 'Save or share the file').click()]);
 	const path = join(newProfile(), `${name}.jsonl.gz`);
 	await download.saveAs(path);
 	await page.getByText('Handed over').waitFor();
@@ -69,7 +69,7 @@ async function restore(page: Page, host: Site, path: string): Promise<void> {
 
 async function joinFile(page: Page, path: string): Promise<void> {
 	await page.getByLabel('Backup file').setInputFiles(path);
-	await button(page, 'Join it to this book').tap();
+	await button(page, 'Join it to this book').click();
 	await page.getByText(/^Restored: \d+ entries/).waitFor();
 }
 
@@ -115,13 +115,13 @@ describe('the demo book', () => {
 		expect(await rows.count()).toBe(1);
 
 		await page.goto(host.url('/book/check'));
-		await button(page, 'Check the book').tap();
+		await button(page, 'Check the book').click();
 		await page.getByText('Nothing is missing and nothing was changed.').waitFor();
 		await expectClean(page, 'the integrity check');
 		await page.goto(host.url('/'));
 		await page.getByRole('heading', { name: 'Spoon Fair, stall 9' }).waitFor();
 
-		await button(page, 'Leave and remove').tap();
+		await button(page, 'Leave and remove').click();
 		await page.getByText('The demo book is removed').waitFor();
 		expect(await databases(page)).toEqual(['meltbook']);
 		await page.goto(host.url('/book'));
@@ -137,7 +137,7 @@ describe('a purchase', () => {
 		const host = await site();
 		const page = await visit(host);
 		await openDemo(page, host);
-		await page.getByText('A-0010').tap();
+		await page.getByText('A-0010').click();
 		await page.getByRole('heading', { name: 'Purchase A-0010' }).waitFor();
 		const rows = page.getByRole('list', { name: 'Pieces' }).getByRole('listitem');
 		const values = await rows.evaluateAll((all) => all.map((row) => row.querySelector('.worth')?.textContent ?? ''));
@@ -164,26 +164,26 @@ describe('a purchase', () => {
 		// 80 mm in points
 		expect(await pageWidths(page)).toEqual([expect.closeTo(226.8, 0)]);
 
-		const [download] = await Promise.all([page.waitForEvent('download'), button(page, 'Pieces as CSV').tap()]);
+		const [download] = await Promise.all([page.waitForEvent('download'), button(page, 'Pieces as CSV').click()]);
 		expect(download.suggestedFilename()).toBe('A-0010.csv');
 		const lines = readFileSync(await download.path(), 'utf8').trim().split('\r\n');
 		expect(lines.length).toBe(6);
 		expect(lines[1]).toMatch(/^watch case,1,41\.6,g,18 kt,/);
 
 		const before = await dump(page, 'meltbook-demo');
-		await button(page, 'Take back this purchase').tap();
+		await button(page, 'Take back this purchase').click();
 		await page.getByText('The number A-0010 stays used').waitFor();
-		await button(page, 'Take it back').tap();
+		await button(page, 'Take it back').click();
 		await page.getByRole('heading', { name: 'Taken back' }).waitFor();
 		await expectClean(page, 'a purchase that was taken back');
-		await button(page, 'Undo').tap();
+		await button(page, 'Undo').click();
 		await button(page, 'Print the slip').waitFor();
 		expect(await rows.evaluateAll((all) => all.map((row) => row.querySelector('.worth')?.textContent ?? ''))).toEqual(values);
 		expect((await dump(page, 'meltbook-demo')).sums).toBe(before.sums);
 
-		await button(page, 'Take back this purchase').tap();
-		await button(page, 'Take it back').tap();
-		await button(page, 'To the counter').tap();
+		await button(page, 'Take back this purchase').click();
+		await button(page, 'Take it back').click();
+		await button(page, 'To the counter').click();
 		await page.getByRole('heading', { name: 'Estate of a watchmaker' }).waitFor();
 	});
 });
@@ -200,7 +200,7 @@ describe('a backup', () => {
 		const page = await visit(host);
 		await openDemo(page, host);
 		const demo = await backUp(page, host, 'demo');
-		await button(page, 'Leave and remove').tap();
+		await button(page, 'Leave and remove').click();
 		await page.getByText('The demo book is removed').waitFor();
 		await restore(page, host, demo);
 		const own = await backUp(page, host, 'own');
@@ -228,8 +228,8 @@ describe('a backup', () => {
 		await page.goto(host.url('/book'));
 		await page.getByText('This device has lost your book').waitFor();
 		await expectClean(page, 'a book that is missing');
-		await button(page, 'Go on, and restore a backup in Book').tap();
-		await page.getByRole('link', { name: 'Restore a backup' }).tap();
+		await button(page, 'Go on, and restore a backup in Book').click();
+		await page.getByRole('link', { name: 'Restore a backup' }).click();
 		await page.getByLabel('Backup file').waitFor();
 		const empty = await dump(page);
 		expect(empty.records).toBe('[]');
@@ -249,13 +249,13 @@ describe('a backup', () => {
 		await button(page, 'Join it to this book').waitFor();
 		await expectClean(page, 'the preview of a backup');
 		expect(await dump(page), 'a preview changes nothing').toEqual(empty);
-		await button(page, 'Leave it').tap();
+		await button(page, 'Leave it').click();
 		await joinFile(page, own);
 		expect(await dump(page)).toEqual(before);
 		await page.getByLabel('Backup file').setInputFiles(own);
 		await button(page, 'Everything in it is here already').waitFor();
 		await page.goto(host.url('/book/check'));
-		await button(page, 'Check the book').tap();
+		await button(page, 'Check the book').click();
 		await page.getByText('Nothing is missing and nothing was changed.').waitFor();
 	});
 
@@ -264,7 +264,7 @@ describe('a backup', () => {
 		const page = await visit(host);
 		await openDemo(page, host);
 		const file = await backUp(page, host, 'older');
-		await button(page, 'Leave and remove').tap();
+		await button(page, 'Leave and remove').click();
 		await page.getByText('The demo book is removed').waitFor();
 		await restore(page, host, file);
 		await page.evaluate(
@@ -280,13 +280,13 @@ describe('a backup', () => {
 				})
 		);
 		// the book was taken away under the open page: what it goes on to read fails, and only the banner says so
-		await page.getByRole('link', { name: 'Stock' }).tap();
+		await page.getByRole('link', { name: 'Stock' }).click();
 		await page.getByText('Another tab has opened this book with a newer version').waitFor();
-		await page.getByRole('link', { name: 'Counter' }).tap();
+		await page.getByRole('link', { name: 'Counter' }).click();
 		await page.goto(host.url('/book'));
 		await page.getByText('This book was written by a newer version').waitFor();
 		const before = await dump(page);
-		await page.getByRole('link', { name: 'Export' }).tap();
+		await page.getByRole('link', { name: 'Export' }).click();
 		expect(await page.getByLabel('Backup file').count(), 'nothing can be restored into it').toBe(0);
 		const again = await backUp(page, host, 'newer');
 		const lines = (path: string) => gunzipSync(readFileSync(path)).toString('utf8').trim().split('\n').slice(1).sort();
@@ -303,7 +303,7 @@ describe('a backup', () => {
 		const first = await visit(host);
 		await openDemo(first, host);
 		const shared = await backUp(first, host, 'shared');
-		await button(first, 'Leave and remove').tap();
+		await button(first, 'Leave and remove').click();
 		await first.getByText('The demo book is removed').waitFor();
 		await restore(first, host, shared);
 		const second = await visit(host);
@@ -311,12 +311,12 @@ describe('a backup', () => {
 
 		for (const page of [first, second]) {
 			await page.goto(host.url('/purchase/demo-purchase-10'));
-			await button(page, 'Take back this purchase').tap();
-			await button(page, 'Take it back').tap();
+			await button(page, 'Take back this purchase').click();
+			await button(page, 'Take it back').click();
 			await page.getByRole('heading', { name: 'Taken back' }).waitFor();
 		}
 		// the second one thought better of it
-		await button(second, 'Undo').tap();
+		await button(second, 'Undo').click();
 		await button(second, 'Print the slip').waitFor();
 		await restore(first, host, await backUp(second, host, 'second'));
 
@@ -324,19 +324,19 @@ describe('a backup', () => {
 		const conflict = first.getByRole('region', { name: 'Purchase: A-0010', exact: true });
 		await conflict.waitFor();
 		expect(await conflict.getByText('Taken back or removed.').count()).toBe(1);
-		await conflict.getByText('Where they differ').tap();
+		await conflict.getByText('Where they differ').click();
 		await expectClean(first, 'two versions');
 		await shot(first, 'conflict');
 		const kept = conflict.locator('.version').filter({ hasNotText: 'Taken back or removed.' });
-		await kept.getByRole('button').tap();
+		await kept.getByRole('button').click();
 		await conflict.waitFor({ state: 'detached' });
 		const lot = first.getByRole('region', { name: 'Lot: Estate of a watchmaker', exact: true });
-		await lot.locator('.version').filter({ hasText: 'bought' }).getByRole('button').tap();
+		await lot.locator('.version').filter({ hasText: 'bought' }).getByRole('button').click();
 		await first.getByText('None. When two devices').waitFor();
 		await first.goto(host.url('/purchase/demo-purchase-10'));
 		await button(first, 'Print the slip').waitFor();
 		await first.goto(host.url('/book/check'));
-		await button(first, 'Check the book').tap();
+		await button(first, 'Check the book').click();
 		await first.getByText('Nothing is missing and nothing was changed.').waitFor();
 	});
 });

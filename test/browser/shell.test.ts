@@ -106,6 +106,13 @@ async function release(page: Page): Promise<string> {
 	);
 }
 
+/** What a tab knows of its release, for the message of a test that fails. */
+async function state(): Promise<string> {
+	const registration = await navigator.serviceWorker.getRegistration();
+	const workers = [registration?.installing?.state, registration?.waiting?.state, registration?.active?.state];
+	return JSON.stringify({ workers, controlled: navigator.serviceWorker.controller !== null, text: document.body.innerText.slice(0, 500) });
+}
+
 describe('a new release', () => {
 	it('waits until it is asked for, then takes over both tabs, once, without a signal', async () => {
 		const host = await site('build');
@@ -134,14 +141,18 @@ describe('a new release', () => {
 		const loads = [0, 0];
 		first.on('load', () => (loads[0]! += 1));
 		second.on('load', () => (loads[1]! += 1));
-		await button(second).tap();
+		await second.bringToFront();
+		await button(second).click();
 		for (const page of [first, second]) {
-			await page.waitForFunction(
+			const taken = page.waitForFunction(
 				(before) => document.readyState === 'complete' && performance.now() > 1_500 && performance.getEntriesByType('resource').some(
 					({ name }) => name.includes('/immutable/entry/') && !before.includes(name.slice(name.indexOf('/immutable/')))
 				),
 				old
 			);
+			await taken.catch(async (reason: unknown) => {
+				throw new Error(`not taken over at ${page.url()}: ${await page.evaluate(state)}`, { cause: reason });
+			});
 		}
 		await expectAt(first, 'Counter');
 		await expectAt(second, 'Stock');
