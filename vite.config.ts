@@ -56,6 +56,7 @@ export default defineConfig({
 				test: {
 					name: 'browser',
 					include: ['test/browser/**/*.test.ts'],
+					globalSetup: ['test/browser/primed.ts'],
 					fileParallelism: false,
 					testTimeout: 120_000,
 					hookTimeout: 120_000

@@ -1,21 +1,10 @@
 import type { Page } from 'playwright-core';
-import { afterEach, describe, expect, it } from 'vitest';
-import { expectAccessible, expectNoSidewaysScroll, openSite, openVisitor, shot, type Site, type Visitor } from './harness.ts';
-
-const open: { site: Site | null; visitor: Visitor | null } = { site: null, visitor: null };
-afterEach(async () => {
-	const closed = await Promise.allSettled([open.visitor?.close(), open.site?.stop()]);
-	open.site = open.visitor = null;
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
+import { describe, expect, it } from 'vitest';
+import { expectAccessible, expectNoSidewaysScroll, shot, type Site } from './harness.ts';
+import { firstVisit } from './visits.ts';
 
 async function demoBook(device: 'phone' | 'desktop' = 'phone'): Promise<{ site: Site; page: Page }> {
-	const site = await openSite('build');
-	open.site = site;
-	const visitor = await openVisitor(site, { device });
-	open.visitor = visitor;
-	const { page } = visitor;
-	await page.goto(site.url('/'));
+	const { site, page } = await firstVisit({ device });
 	await page.getByRole('button', { name: 'Look at a demo book' }).click();
 	await page.getByText('Demo book: an invented town').waitFor();
 	await page.locator('[data-row]').first().waitFor();
@@ -35,12 +24,8 @@ async function expectFit(page: Page, name: string): Promise<void> {
 
 describe('every page, in light and dark, on a narrow screen', () => {
 	it('of an empty book', async () => {
-		const site = await openSite('build');
-		open.site = site;
 		// the router reports an address that leads nowhere; the page says so too
-		const visitor = await openVisitor(site, { tolerate: /Not found: \/no\/such\/page/ });
-		open.visitor = visitor;
-		const { page } = visitor;
+		const { site, page } = await firstVisit({ tolerate: /Not found: \/no\/such\/page/ });
 		for (const [path, heading] of [
 			['/', 'New lot'],
 			['/stock', 'Stock'],

@@ -1,32 +1,15 @@
 import type { Page } from 'playwright-core';
-import { afterEach, describe, expect, it } from 'vitest';
-import { expectAccessible, expectNoSidewaysScroll, openSite, openVisitor, shot, workerReady, type Site, type Visitor } from './harness.ts';
+import { describe, expect, it } from 'vitest';
+import { expectAccessible, expectNoSidewaysScroll, shot } from './harness.ts';
+import { comeBackOffline } from './visits.ts';
 
 // A bag at a fair, offline: which pieces to open, what is risked with the rest. Ten thousand of them: long-lot.test.ts.
-
-const open: { sites: Site[]; visitors: Visitor[] } = { sites: [], visitors: [] };
-afterEach(async () => {
-	const closed = await Promise.allSettled([
-		...open.visitors.splice(0).map((visitor) => visitor.close()),
-		...open.sites.splice(0).map((site) => site.stop())
-	]);
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
 
 const tidy = (text: string) => text.replace(/[\u00a0\u202f]/g, ' ');
 const main = async (page: Page) => tidy(await page.locator('main').innerText());
 
 async function begin(): Promise<Page> {
-	const site = await openSite('build');
-	open.sites.push(site);
-	const visitor = await openVisitor(site);
-	open.visitors.push(visitor);
-	const { page } = visitor;
-	await page.goto(site.url('/'));
-	await page.getByText('Ready for offline').waitFor();
-	await workerReady(page);
-	await site.stop();
-	await page.reload();
+	const { page } = await comeBackOffline('/');
 	await page.getByRole('link', { name: 'Type prices' }).click();
 	await page.getByRole('textbox', { name: 'Gold', exact: true }).fill('4186.20');
 	await page.getByRole('textbox', { name: 'Silver', exact: true }).fill('52.30');

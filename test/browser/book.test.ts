@@ -2,29 +2,13 @@ import { readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { gunzipSync, gzipSync } from 'node:zlib';
 import type { Page } from 'playwright-core';
-import { afterEach, describe, expect, it } from 'vitest';
-import { expectAccessible, expectNoSidewaysScroll, newProfile, openSite, openVisitor, shot, type Site, type Visitor } from './harness.ts';
-
-const sites: Site[] = [];
-const visitors: Visitor[] = [];
-
-afterEach(async () => {
-	const closing = visitors.splice(0).map((visitor) => visitor.close());
-	const closed = await Promise.allSettled([...closing, ...sites.splice(0).map((one) => one.stop())]);
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
-
-async function site(): Promise<Site> {
-	const opened = await openSite('build');
-	sites.push(opened);
-	return opened;
-}
+import { describe, expect, it } from 'vitest';
+import { expectAccessible, expectNoSidewaysScroll, newProfile, shot, type Site } from './harness.ts';
+import { startSite, visit as open } from './visits.ts';
 
 /** A first visit, up to the word that it works offline. */
 async function visit(at: Site): Promise<Page> {
-	const opened = await openVisitor(at);
-	visitors.push(opened);
-	const { page } = opened;
+	const { page } = await open(at);
 	await page.goto(at.url('/'));
 	const ready = page.locator('.banner').filter({ hasText: 'Ready for offline' }).getByRole('button', { name: 'Good' });
 	await ready.click();
@@ -96,7 +80,7 @@ const databases = (page: Page) => page.evaluate(async () => (await indexedDB.dat
 
 describe('the demo book', () => {
 	it('is offered by an empty book, is marked, shows every page clean, and leaves nothing behind', async () => {
-		const host = await site();
+		const host = await startSite();
 		const page = await visit(host);
 		await page.goto(host.url('/book'));
 		await page.getByText('Nothing bought yet').waitFor();
@@ -134,7 +118,7 @@ const cents = (text: string) => Math.round(Number(text.replace(/[^\d.]/g, '')) *
 
 describe('a purchase', () => {
 	it('adds up as printed, gives a slip without values on both papers, and can be taken back and undone', async () => {
-		const host = await site();
+		const host = await startSite();
 		const page = await visit(host);
 		await openDemo(page, host);
 		await page.getByText('A-0010').click();
@@ -196,7 +180,7 @@ async function pageWidths(page: Page): Promise<number[]> {
 
 describe('a backup', () => {
 	it('brings the identical book back after the database was wiped; a damaged one is refused and changes nothing', async () => {
-		const host = await site();
+		const host = await startSite();
 		const page = await visit(host);
 		await openDemo(page, host);
 		const demo = await backUp(page, host, 'demo');
@@ -260,7 +244,7 @@ describe('a backup', () => {
 	});
 
 	it('can be made of a book that a newer version wrote, which is not changed', async () => {
-		const host = await site();
+		const host = await startSite();
 		const page = await visit(host);
 		await openDemo(page, host);
 		const file = await backUp(page, host, 'older');
@@ -299,7 +283,7 @@ describe('a backup', () => {
 	});
 
 	it('of another device shows both versions where the two disagree, and the kept one settles it', async () => {
-		const host = await site();
+		const host = await startSite();
 		const first = await visit(host);
 		await openDemo(first, host);
 		const shared = await backUp(first, host, 'shared');

@@ -1,6 +1,7 @@
 import type { Page } from 'playwright-core';
-import { afterEach, describe, expect, it } from 'vitest';
-import { openSite, openVisitor, shot, workerReady, type Site, type Visitor } from './harness.ts';
+import { describe, expect, it } from 'vitest';
+import { shot, workerReady } from './harness.ts';
+import { comeBackOffline, startSite, visit } from './visits.ts';
 
 // A buyer's day on a phone whose host is switched off after the first visit. Every figure on the screen is worked out a second
 // time here, in whole numbers and fractions of them, without any function of the app.
@@ -111,20 +112,6 @@ function normalCdf(z: number): number {
 
 /* -- the day -- */
 
-const open: { sites: Site[]; visitors: Visitor[] } = { sites: [], visitors: [] };
-afterEach(async () => {
-	const closed = await Promise.allSettled([
-		...open.visitors.splice(0).map((visitor) => visitor.close()),
-		...open.sites.splice(0).map((site) => site.stop())
-	]);
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
-async function visit(site: Site, profile?: string): Promise<Visitor> {
-	const visitor = await openVisitor(site, profile === undefined ? {} : { profile });
-	open.visitors.push(visitor);
-	return visitor;
-}
-
 const line = (page: Page) => page.getByLabel('Mass, mark, article and count of a piece');
 const dock = (page: Page) => page.locator('.dock');
 const said = (page: Page, text: string) => page.getByRole('status').filter({ hasText: text }).waitFor();
@@ -160,8 +147,7 @@ async function table(page: Page, heading: string): Promise<Record<string, string
 
 describe('a day at the counter', () => {
 	it('weighs, values, offers and buys without a signal, and finds it all again to the last digit', async () => {
-		const site = await openSite('build');
-		open.sites.push(site);
+		const site = await startSite();
 		const first = await visit(site);
 		let { page } = first;
 		await page.goto(site.url('/'));
@@ -309,8 +295,7 @@ describe('a day at the counter', () => {
 		// the app is closed, and opened again with the host still switched off
 		const { profile } = first;
 		await first.close();
-		open.visitors.splice(0);
-		({ page } = await visit(site, profile));
+		({ page } = await visit(site, { profile }));
 		await page.goto(at);
 		expect(await readAll()).toBe(bought);
 		await page.getByRole('link', { name: 'Stock' }).click();
@@ -319,12 +304,7 @@ describe('a day at the counter', () => {
 	});
 
 	it('keeps a half-typed line through a reload, and a lot through being left', async () => {
-		const site = await openSite('build');
-		open.sites.push(site);
-		const { page } = await visit(site);
-		await page.goto(site.url('/'));
-		await workerReady(page);
-		await site.stop();
+		const { page } = await comeBackOffline('/');
 		await addByLine(page, '14k ring 3.10 g');
 		await line(page).fill('925 spoon 2');
 		await page.waitForTimeout(600);

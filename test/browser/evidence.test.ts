@@ -1,17 +1,9 @@
 import type { Page } from 'playwright-core';
-import { afterEach, describe, expect, it } from 'vitest';
-import { expectAccessible, expectNoSidewaysScroll, openSite, openVisitor, shot, workerReady, type Site, type Visitor } from './harness.ts';
+import { describe, expect, it } from 'vitest';
+import { expectAccessible, expectNoSidewaysScroll, shot } from './harness.ts';
+import { comeBackOffline, firstVisit } from './visits.ts';
 
 // One filled chain, as a buyer meets it: everything that reads the surface agrees with the mark, water does not, a cut settles it.
-
-const open: { sites: Site[]; visitors: Visitor[] } = { sites: [], visitors: [] };
-afterEach(async () => {
-	const closed = await Promise.allSettled([
-		...open.visitors.splice(0).map((visitor) => visitor.close()),
-		...open.sites.splice(0).map((site) => site.stop())
-	]);
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
 
 const tidy = (text: string) => text.replace(/[\u00a0\u202f]/g, ' ');
 const said = (page: Page, text: string) => page.getByRole('status').filter({ hasText: text }).waitFor();
@@ -35,16 +27,7 @@ const add = (page: Page, what: string) => section(page).getByRole('button', { na
 
 describe('a filled hollow chain', () => {
 	it('is found out offline: surface tests agree, water contradicts, a cut settles, and the offer follows', async () => {
-		const site = await openSite('build');
-		open.sites.push(site);
-		const visitor = await openVisitor(site);
-		open.visitors.push(visitor);
-		const { page } = visitor;
-		await page.goto(site.url('/'));
-		await page.getByText('Ready for offline').waitFor();
-		await workerReady(page);
-		await site.stop();
-		await page.reload();
+		const { page } = await comeBackOffline('/');
 
 		await page.getByRole('link', { name: 'Type prices' }).click();
 		await page.getByRole('textbox', { name: 'Gold', exact: true }).fill('4186.20');
@@ -147,12 +130,7 @@ describe('a filled hollow chain', () => {
 	}, 120_000);
 
 	it('gets no fineness from water when it is a ring of 2 g, and the page says what would help', async () => {
-		const site = await openSite('build');
-		open.sites.push(site);
-		const visitor = await openVisitor(site, { device: 'desktop' });
-		open.visitors.push(visitor);
-		const { page } = visitor;
-		await page.goto(site.url('/'));
+		const { page } = await firstVisit({ device: 'desktop' });
 		const line = page.getByLabel('Mass, mark, article and count of a piece');
 		await line.fill('14k ring 2.00 g');
 		await line.press('Enter');

@@ -129,7 +129,7 @@ export function newProfile(): string {
 }
 
 /** Opens a browser as a person would: 390x844 with touch, or a desktop window. */
-export async function openVisitor(site: Site, options: VisitOptions = {}): Promise<Visitor> {
+export async function openVisitor(site: Pick<Site, 'origin'>, options: VisitOptions = {}): Promise<Visitor> {
 	const profile = options.profile ?? newProfile();
 	const phone = (options.device ?? 'phone') === 'phone';
 	const context = await chromium.launchPersistentContext(profile, {

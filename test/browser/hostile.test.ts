@@ -1,16 +1,9 @@
 import type { Locator, Page } from 'playwright-core';
-import { afterEach, expect, it } from 'vitest';
-import { openSite, openVisitor, type Site, type Visitor } from './harness.ts';
+import { expect, it } from 'vitest';
+import { firstVisit } from './visits.ts';
 
 // Whatever is typed or pasted into a field, the screen answers with a right value or a clear problem: never with what a program
 // says to itself, never with markup taken for markup, and never with digits that nobody typed.
-
-const open: { site: Site | null; visitor: Visitor | null } = { site: null, visitor: null };
-afterEach(async () => {
-	const closed = await Promise.allSettled([open.visitor?.close(), open.site?.stop()]);
-	open.site = open.visitor = null;
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
 
 const numbers = [
 	'12,34', '1.234,5', '1,234.5', '1,234', '1.234', '1e9', '1E-3', '-3', '\u22123', '+3', '--3', '3-', '0', '-0', '00', '0x10', '0b1', '1_000', '1 000', "1'000",
@@ -46,11 +39,7 @@ function beyond(answer: string, typed: string): string {
 }
 
 it('hostile text in the fields gives a value or a problem', async () => {
-	const site = await openSite('build');
-	open.site = site;
-	const visitor = await openVisitor(site);
-	open.visitor = visitor;
-	const { page } = visitor;
+	const { site, page } = await firstVisit();
 	await page.goto(site.url('/prices'));
 	const gold = page.getByRole('textbox', { name: 'Gold', exact: true });
 	expect(hostileLines.length).toBeGreaterThanOrEqual(200);

@@ -1,18 +1,8 @@
-import { afterEach, expect, it } from 'vitest';
-import { openSite, openVisitor, type Site, type Visitor } from './harness.ts';
+import { expect, it } from 'vitest';
+import { firstVisit } from './visits.ts';
 
-const open: { site: Site | null; visitor: Visitor | null } = { site: null, visitor: null };
-afterEach(async () => {
-	const closed = await Promise.allSettled([open.visitor?.close(), open.site?.stop()]);
-	open.site = open.visitor = null;
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
 async function counter() {
-	const site = await openSite('build');
-	open.site = site;
-	const visitor = await openVisitor(site);
-	open.visitor = visitor;
-	const { page } = visitor;
+	const { site, page } = await firstVisit();
 	await page.goto(site.url('/prices'));
 	await page.getByRole('textbox', { name: 'Gold', exact: true }).fill('4186.20');
 	await page.getByRole('textbox', { name: 'Silver', exact: true }).fill('52.315');

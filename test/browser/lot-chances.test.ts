@@ -1,17 +1,9 @@
 import type { Page } from 'playwright-core';
-import { afterEach, describe, expect, it } from 'vitest';
-import { expectAccessible, expectNoSidewaysScroll, openSite, openVisitor, shot, workerReady, type Site, type Visitor } from './harness.ts';
+import { describe, expect, it } from 'vitest';
+import { expectAccessible, expectNoSidewaysScroll, shot } from './harness.ts';
+import { comeBackOffline } from './visits.ts';
 
 // What a few untested pieces are worth if one of them is not what it is taken for, asked offline.
-
-const open: { sites: Site[]; visitors: Visitor[] } = { sites: [], visitors: [] };
-afterEach(async () => {
-	const closed = await Promise.allSettled([
-		...open.visitors.splice(0).map((visitor) => visitor.close()),
-		...open.sites.splice(0).map((site) => site.stop())
-	]);
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
 
 const tidy = (text: string) => text.replace(/[\u00a0\u202f]/g, ' ');
 
@@ -26,16 +18,7 @@ async function asked(page: Page, metal: string): Promise<{ low: number; high: nu
 
 describe('the why of the melt value', () => {
 	it('counts the chance that a piece is not what it is taken for, metal by metal, without a network', async () => {
-		const site = await openSite('build');
-		open.sites.push(site);
-		const visitor = await openVisitor(site);
-		open.visitors.push(visitor);
-		const { page } = visitor;
-		await page.goto(site.url('/'));
-		await page.getByText('Ready for offline').waitFor();
-		await workerReady(page);
-		await site.stop();
-		await page.reload();
+		const { page } = await comeBackOffline('/');
 		await page.getByRole('link', { name: 'Type prices' }).click();
 		await page.getByRole('textbox', { name: 'Gold', exact: true }).fill('4186.20');
 		await page.getByRole('textbox', { name: 'Silver', exact: true }).fill('49.17');
@@ -66,12 +49,7 @@ describe('the why of the melt value', () => {
 	}, 120_000);
 
 	it('says that a lot of more than two hundred entries is too long for that', async () => {
-		const site = await openSite('build');
-		open.sites.push(site);
-		const visitor = await openVisitor(site);
-		open.visitors.push(visitor);
-		const { page } = visitor;
-		await page.goto(site.url('/prices'));
+		const { site, page } = await comeBackOffline('/prices');
 		await page.getByRole('textbox', { name: 'Gold', exact: true }).fill('4186.20');
 		await page.getByRole('button', { name: 'Save prices' }).click();
 		await page.getByRole('status').filter({ hasText: 'Prices saved.' }).waitFor();

@@ -1,31 +1,14 @@
 import type { Page } from 'playwright-core';
-import { afterEach, describe, expect, it } from 'vitest';
-import { expectAccessible, expectNoSidewaysScroll, openSite, openVisitor, shot, workerReady, type Site, type VisitOptions, type Visitor } from './harness.ts';
-
-const sites: Site[] = [];
-const visitors: Visitor[] = [];
+import { describe, expect, it } from 'vitest';
+import { expectAccessible, expectNoSidewaysScroll, shot, type VisitOptions } from './harness.ts';
+import { comeBackOffline, type Away } from './visits.ts';
 
 /** The prices of a browser that has been here before, on a host that is switched off. */
-async function pricesOffline(options?: VisitOptions): Promise<{ site: Site; page: Page }> {
-	const site = await openSite('build');
-	sites.push(site);
-	const visitor = await openVisitor(site, options);
-	visitors.push(visitor);
-	const { page } = visitor;
-	await page.goto(site.url('/'));
-	await workerReady(page);
-	await site.stop();
-	await page.goto(site.url('/prices'));
+async function pricesOffline(options?: VisitOptions): Promise<{ site: Away; page: Page }> {
+	const { site, page } = await comeBackOffline('/prices', options);
 	await page.getByRole('heading', { name: 'Prices', level: 1 }).waitFor();
 	return { site, page };
 }
-
-// every visitor is closed here, so that no test can forget to ask whether a page broke a rule
-afterEach(async () => {
-	const closing = visitors.splice(0).map((visitor) => visitor.close());
-	const closed = await Promise.allSettled([...closing, ...sites.splice(0).map((one) => one.stop())]);
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
 
 const field = (page: Page, name: string) => page.getByRole('textbox', { name, exact: true });
 const save = (page: Page) => page.getByRole('button', { name: 'Save prices' });

@@ -1,38 +1,7 @@
 import type { Page } from 'playwright-core';
-import { afterEach, describe, expect, it } from 'vitest';
-import {
-	expectAccessible,
-	expectNoSidewaysScroll,
-	openDoomed,
-	openSite,
-	openVisitor,
-	shot,
-	type Site,
-	type VisitOptions,
-	type Visitor
-} from './harness.ts';
-
-const sites: Site[] = [];
-const visitors: Visitor[] = [];
-
-async function site(folder: string): Promise<Site> {
-	const opened = await openSite(folder);
-	sites.push(opened);
-	return opened;
-}
-
-async function visit(at: Site, options?: VisitOptions): Promise<Visitor> {
-	const opened = await openVisitor(at, options);
-	visitors.push(opened);
-	return opened;
-}
-
-// every visitor is closed here, so that no test can forget to ask whether a page broke a rule
-afterEach(async () => {
-	const closing = visitors.splice(0).map((visitor) => visitor.close());
-	const closed = await Promise.allSettled([...closing, ...sites.splice(0).map((one) => one.stop())]);
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
+import { describe, expect, it } from 'vitest';
+import { expectAccessible, expectNoSidewaysScroll, openDoomed, openSite, openVisitor, shot } from './harness.ts';
+import { startSite, visit } from './visits.ts';
 
 const places = (page: Page) => page.getByRole('navigation', { name: 'Places' });
 const place = (page: Page, name: string) => places(page).getByRole('link', { name, exact: true });
@@ -56,7 +25,7 @@ describe.each([
 	['under a path', 'build-path', '/meltbook']
 ])('the app %s', (_, folder, base) => {
 	it('works without a signal after one visit, deep links and reloads included', async () => {
-		const host = await site(folder);
+		const host = await startSite(folder);
 		const { page } = await visit(host);
 		await page.goto(host.url('/'));
 		expect(new URL(page.url()).pathname).toBe(`${base}/`);
@@ -79,7 +48,7 @@ describe.each([
 	});
 
 	it('opens at a deep link on a host that knows files only, and is then kept', async () => {
-		const host = await site(folder);
+		const host = await startSite(folder);
 		const { page } = await visit(host);
 		const answer = await page.goto(host.url('/book'));
 		expect(answer?.status()).toBe(404);
@@ -115,7 +84,7 @@ async function state(): Promise<string> {
 
 describe('a new release', () => {
 	it('waits until it is asked for, then takes over both tabs, once, without a signal', async () => {
-		const host = await site('build');
+		const host = await startSite('build');
 		const visitor = await visit(host);
 		const { page: first } = visitor;
 		await first.goto(host.url('/'));
@@ -165,7 +134,7 @@ describe('a new release', () => {
 
 describe('the frame of the app', () => {
 	it('can be installed', async () => {
-		const host = await site('build');
+		const host = await startSite('build');
 		const { page } = await visit(host);
 		await page.goto(host.url('/'));
 		await readyForOffline(page);
@@ -177,7 +146,7 @@ describe('the frame of the app', () => {
 	});
 
 	it('is reached by keyboard, found clean by axe and does not scroll sideways', async () => {
-		const host = await site('build');
+		const host = await startSite('build');
 		const { page } = await visit(host, { device: 'desktop' });
 		await page.goto(host.url('/'));
 		await readyForOffline(page);
@@ -197,7 +166,7 @@ describe('the frame of the app', () => {
 	});
 
 	it('opens again offline after the browser was killed', async () => {
-		const host = await site('build');
+		const host = await startSite('build');
 		const doomed = await openDoomed(host);
 		await doomed.page.goto(host.url('/'));
 		await readyForOffline(doomed.page);
@@ -211,7 +180,7 @@ describe('the frame of the app', () => {
 
 describe('the watch over pages', () => {
 	it('reports an error, a breach of the content policy and a request to another host', async () => {
-		const host = await site('build');
+		const host = await startSite('build');
 		const visitor = await openVisitor(host);
 		await visitor.page.goto(host.url('/'));
 		await visitor.page.evaluate(() => {

@@ -1,15 +1,8 @@
 import type { Page } from 'playwright-core';
-import { afterEach, expect, it } from 'vitest';
-import { openSite, openVisitor, type Site, type Visitor } from './harness.ts';
+import { expect, it } from 'vitest';
+import { startSite, visit } from './visits.ts';
 
 // "Saved" means on the medium. IndexedDB's default durability is relaxed, so every transaction that writes must ask for strict.
-
-const open: { site: Site | null; visitor: Visitor | null } = { site: null, visitor: null };
-afterEach(async () => {
-	const closed = await Promise.allSettled([open.visitor?.close(), open.site?.stop()]);
-	open.site = open.visitor = null;
-	for (const one of closed) if (one.status === 'rejected') throw one.reason;
-});
 
 type Asked = { readonly stores: readonly string[]; readonly durability: string };
 
@@ -30,11 +23,8 @@ async function listen(page: Page): Promise<void> {
 }
 
 it('asks for strict durability in every transaction that writes, whatever a person does', async () => {
-	const site = await openSite('build');
-	open.site = site;
-	const visitor = await openVisitor(site);
-	open.visitor = visitor;
-	const { page } = visitor;
+	const site = await startSite();
+	const { page } = await visit(site);
 	await listen(page);
 	const said = (text: string) => page.getByRole('status').getByText(text).waitFor();
 	await page.goto(site.url('/'));
