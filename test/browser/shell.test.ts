@@ -117,7 +117,9 @@ describe('a new release', () => {
 				(before) => document.readyState === 'complete' && performance.now() > 1_500 && performance.getEntriesByType('resource').some(
 					({ name }) => name.includes('/immutable/entry/') && !before.includes(name.slice(name.indexOf('/immutable/')))
 				),
-				old
+				old,
+				// frames are not drawn in a tab that lies behind another
+				{ polling: 200 }
 			);
 			await taken.catch(async (reason: unknown) => {
 				throw new Error(`not taken over at ${page.url()}: ${await page.evaluate(state)}`, { cause: reason });
