@@ -116,6 +116,8 @@ describe('a new release', () => {
 		await button(first).waitFor();
 		expect(await release(first), 'a reload alone does not change the release').toBe(old);
 
+		// the browser itself looks for a newer release a second after a load; the host does not go away under it
+		await first.waitForTimeout(2_000);
 		await host.stop();
 		const loads = [0, 0];
 		first.on('load', () => (loads[0]! += 1));
