@@ -3,8 +3,6 @@ import { saveAll } from './save-first.ts';
 
 /** How long drafts may take to be saved before this tab is loaded afresh, in milliseconds. */
 const PATIENCE = 4_000;
-/** How often the waiting release is asked again to take over, in milliseconds. */
-const ASK_AGAIN = 1_000;
 /** How often a long-lived tab asks whether there is a newer release, in milliseconds. */
 const ASK_EVERY = 60 * 60 * 1_000;
 
@@ -60,13 +58,7 @@ export class Updates {
 			this.applying = true;
 			// a tab that was loaded past the worker is not controlled and would hear of no change
 			workbox.addEventListener('activated', () => void afresh());
-			const takeOver = (): void => {
-				workbox.messageSkipWaiting();
-				// it waits for the older one to come to rest, which is looked at only when that one has done something
-				void container.ready.then(({ active }) => active?.postMessage({ type: 'COUNT_KEPT' }));
-				if (!this.#loading) setTimeout(takeOver, ASK_AGAIN);
-			};
-			takeOver();
+			workbox.messageSkipWaiting();
 		};
 		try {
 			const registration = await workbox.register({ immediate: true });
