@@ -26,7 +26,10 @@ export function restWords({ rest }: Pick<BagPlan, 'rest'>, amount: (value: numbe
 	];
 }
 
-/** How many to open at random so that what is supposed is hardly ever missed. */
-export function neededWords(needed: number, filled: number, format: Format): string {
+/** How many of the pieces to open at random so that what is supposed is hardly ever missed. */
+export function neededWords(needed: number, pieces: number, filled: number, format: Format): string {
+	if (pieces === 1) return 'Open it: there is no other.';
+	// only a single filled piece can hide until the last one is opened
+	if (needed === pieces) return `Open all ${format.count(pieces)}: fewer would miss it more than once in twenty times.`;
 	return `Open ${format.count(needed)} at random, and ${filled === 1 ? 'it is' : 'all of them are'} missed once in twenty times at most.`;
 }

@@ -40,7 +40,9 @@ describe('what is said of a bag', () => {
 	});
 
 	it('says how many to open at random', () => {
-		expect(neededWords(57, 1, format)).toBe('Open 57 at random, and it is missed once in twenty times at most.');
-		expect(neededWords(38, 3, format)).toBe('Open 38 at random, and all of them are missed once in twenty times at most.');
+		expect(neededWords(57, 60, 1, format)).toBe('Open 57 at random, and it is missed once in twenty times at most.');
+		expect(neededWords(38, 60, 3, format)).toBe('Open 38 at random, and all of them are missed once in twenty times at most.');
+		expect(neededWords(6, 6, 1, format)).toBe('Open all 6: fewer would miss it more than once in twenty times.');
+		expect(neededWords(1, 1, 1, format)).toBe('Open it: there is no other.');
 	});
 });
