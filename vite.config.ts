@@ -57,7 +57,6 @@ export default defineConfig({
 					name: 'browser',
 					include: ['test/browser/**/*.test.ts'],
 					globalSetup: ['test/browser/primed.ts'],
-					fileParallelism: false,
 					testTimeout: 120_000,
 					hookTimeout: 120_000
 				}

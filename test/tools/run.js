@@ -32,7 +32,7 @@ async function tests(project, env = {}) {
 	const files = chosen.filter((word) => !(word in parts));
 	const exit = await runTool(
 		'vitest/vitest.mjs',
-		// by itself it leaves a core idle; the browser's tests go one after the other whatever stands here
+		// by itself it leaves a core idle
 		['run', '--project', project, `--maxWorkers=${availableParallelism()}`, '--allowOnly=false', '--reporter=default', '--reporter=json', `--outputFile.json=${report}`, ...files],
 		{ env }
 	);
